@@ -12,6 +12,9 @@ const schema = z.object({
   DWELLBOOK_BASE_URL: z.string().default("http://127.0.0.1:3000"),
   DWELLBOOK_DATA_DIR: z.string().default(".data"),
   DWELLBOOK_MAIL_PAGE_URL: z.string().optional(),
+  DWELLBOOK_WORKER_HEARTBEAT_S: z.coerce.number().min(0.2).max(60).default(5),
+  DWELLBOOK_WORKER_RELEASE_S: z.coerce.number().min(1).max(3600).default(30),
+  DWELLBOOK_WORKER_POLL_MS: z.coerce.number().int().min(100).max(60_000).default(2000),
 });
 
 export type Config = z.infer<typeof schema>;
