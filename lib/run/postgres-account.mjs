@@ -1,8 +1,8 @@
 import { createHash } from "node:crypto";
 import { chownSync, mkdirSync } from "node:fs";
 import { join } from "node:path";
+import { run } from "./commands.mjs";
 import { ensureFolder } from "./folders.mjs";
-import { run } from "./processes.mjs";
 import { Problem } from "./words.mjs";
 
 /**

@@ -1,7 +1,7 @@
 import { existsSync, readdirSync, realpathSync } from "node:fs";
 import { dirname, join } from "node:path";
+import { run } from "./commands.mjs";
 import { installPostgres } from "./packages.mjs";
-import { run } from "./processes.mjs";
 import { Problem } from "./words.mjs";
 
 const debianRoot = "/usr/lib/postgresql";

@@ -1,5 +1,5 @@
 import { join } from "node:path";
-import { run, tailOf } from "./processes.mjs";
+import { run, tailOf } from "./commands.mjs";
 import { Problem } from "./words.mjs";
 
 /**

@@ -1,10 +1,15 @@
 import { spawn } from "node:child_process";
 import { closeSync, openSync, readFileSync, realpathSync, rmSync } from "node:fs";
 import { join } from "node:path";
+import { tailOf } from "./commands.mjs";
 import { freePort } from "./ports.mjs";
 import { asAccount } from "./postgres-account.mjs";
-import { isAlive, processFacts, signalProcess, tailOf, waitUntil } from "./processes.mjs";
+import { isAlive, processFacts, signalProcess, waitUntil } from "./processes.mjs";
 import { Problem } from "./words.mjs";
+
+/** The servers this process started or adopted, and whether it may still start one. */
+const servers = new Set();
+let closed = false;
 
 /**
  * Reads postmaster.pid as PostgreSQL documents it: number, data directory, start, port, socket folder, address,
@@ -71,6 +76,7 @@ function settings(name, port) {
 }
 
 async function launchOnce({ programs, account, home, cluster, name, port }) {
+  if (closed) throw new Problem("PostgreSQL is not started any more.");
   const logPath = join(home, "server.log");
   const log = openSync(logPath, "a", 0o600);
   // In a session of its own, so that a terminal's Ctrl-C reaches the supervisor only.
@@ -83,11 +89,13 @@ async function launchOnce({ programs, account, home, cluster, name, port }) {
   let ended = false;
   child.on("exit", () => {
     ended = true;
+    servers.delete(child.pid);
   });
   child.on("error", () => {
     ended = true;
   });
   child.unref();
+  if (child.pid) servers.add(child.pid);
   const ready = () => {
     const written = readPostmaster(cluster);
     return written?.pid === child.pid && written?.status === "ready";
@@ -105,7 +113,10 @@ async function launchOnce({ programs, account, home, cluster, name, port }) {
  */
 export async function ensureServer(where) {
   const running = await findRunning(where.cluster);
-  if (running) return { ...running, adopted: true };
+  if (running) {
+    servers.add(running.pid);
+    return { ...running, adopted: true };
+  }
   let failure = "";
   // A port that was free a moment ago may be taken by now: try again on another.
   for (const wish of [where.port, undefined, undefined]) {
@@ -128,4 +139,13 @@ export async function stopServer(pid, limitMs = 2_000) {
   signalProcess(pid, "SIGQUIT");
   if (await waitUntil(() => !isAlive(pid), 600)) return;
   signalProcess(pid, "SIGKILL");
+}
+
+/**
+ * Ends every server that this process started or adopted, for good.
+ * @param {number} limitMs for the fast shutdown
+ */
+export async function endServers(limitMs) {
+  closed = true;
+  await Promise.all([...servers].map((pid) => stopServer(pid, limitMs)));
 }

@@ -8,13 +8,13 @@ import {
   writeFileSync,
 } from "node:fs";
 import { join } from "node:path";
+import { run, tailOf } from "./commands.mjs";
 import { ensureDataDir, randomWord, readJson, writeJson } from "./folders.mjs";
 import { withLock } from "./lock.mjs";
 import { asAccount, chooseHome, ensureHome, serverAccount } from "./postgres-account.mjs";
 import { ensurePostgresPrograms } from "./postgres-programs.mjs";
 import { ensureRolesAndDatabase, openPsql } from "./postgres-roles.mjs";
 import { ensureServer, stopServer } from "./postgres-server.mjs";
-import { run, tailOf } from "./processes.mjs";
 import { Problem } from "./words.mjs";
 
 function newRecord() {

@@ -1,14 +1,14 @@
-import { spawn } from "node:child_process";
 import { readFileSync } from "node:fs";
 
 /** Waits.
  * @param {number} ms
+ * @returns {Promise<void>}
  */
 export const pause = (ms) => new Promise((done) => setTimeout(done, ms));
 
 /**
- * What the kernel says about a process: its state letter, parent and start time in clock ticks; null when it is gone.
- * The start time tells a process from a later one that was given the same number.
+ * What the kernel says about a process; null when it is gone. The start time (in clock ticks since boot) tells a
+ * process from a later one that was given the same number.
  * @param {number} pid
  */
 export function processFacts(pid) {
@@ -17,13 +17,7 @@ export function processFacts(pid) {
     // The name is in parentheses and may hold anything, so count from the last one.
     const fields = text.slice(text.lastIndexOf(")") + 2).split(" ");
     const name = text.slice(text.indexOf("(") + 1, text.lastIndexOf(")"));
-    return {
-      name,
-      state: fields[0],
-      parent: Number(fields[1]),
-      group: Number(fields[2]),
-      startTicks: fields[19],
-    };
+    return { name, state: fields[0], parent: Number(fields[1]), startTicks: fields[19] };
   } catch {
     return null;
   }
@@ -43,7 +37,7 @@ export function isAlive(pid, startTicks) {
 /**
  * Sends a signal to a process, or with a negative number to its group; false when nobody was there.
  * @param {number} pid
- * @param {NodeJS.Signals} signal
+ * @param {NodeJS.Signals | 0} signal
  */
 export function signalProcess(pid, signal) {
   try {
@@ -71,36 +65,13 @@ export async function waitUntil(condition, limitMs, stepMs = 25) {
 }
 
 /**
- * Runs a command to its end and keeps what it says.
- * @param {string} command
- * @param {readonly string[]} args
- * @param {import("node:child_process").SpawnOptions & { input?: string, watch?: (child: any) => void }} options
- * @returns {Promise<{ code: number, out: string, err: string }>} code is -1 when the command could not be started
+ * Ends a process group: asks with SIGTERM, and with SIGKILL when the grace is over.
+ * @param {number} leader the number of the group's first process
+ * @param {number} graceMs
  */
-export function run(command, args, options = {}) {
-  const { input, watch, ...rest } = options;
-  return new Promise((done) => {
-    const child = spawn(command, args, { ...rest, stdio: ["pipe", "pipe", "pipe"] });
-    watch?.(child);
-    let out = "";
-    let err = "";
-    child.stdout.setEncoding("utf8").on("data", (text) => {
-      out += text;
-    });
-    child.stderr.setEncoding("utf8").on("data", (text) => {
-      err += text;
-    });
-    child.on("error", (error) => done({ code: -1, out, err: error.message }));
-    child.on("close", (code) => done({ code: code ?? -1, out, err }));
-    child.stdin.on("error", () => {});
-    child.stdin.end(input ?? "");
-  });
-}
-
-/** The last lines of a text, for a failure that must be shown.
- * @param {string} text
- * @param {number} lines
- */
-export function tailOf(text, lines = 15) {
-  return text.trimEnd().split("\n").slice(-lines).join("\n");
+export async function endGroup(leader, graceMs) {
+  if (!signalProcess(-leader, "SIGTERM")) return;
+  if (await waitUntil(() => !signalProcess(-leader, 0), graceMs)) return;
+  signalProcess(-leader, "SIGKILL");
+  await waitUntil(() => !signalProcess(-leader, 0), 300);
 }

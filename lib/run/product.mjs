@@ -1,0 +1,190 @@
+import { accessSync, constants } from "node:fs";
+import { join } from "node:path";
+import { readAccessTable } from "./access.mjs";
+import { ensureBuild } from "./build.mjs";
+import { endCommands } from "./commands.mjs";
+import { hasNoPeople, migrate, seedDemo } from "./data-steps.mjs";
+import { childEnvironment, workerCount } from "./environment.mjs";
+import { dataDirOf, ensureDataDir, ensureFolder, treeDir } from "./folders.mjs";
+import { waitForHealth } from "./health.mjs";
+import { endLeftovers, keepers, whenGone } from "./leftovers.mjs";
+import { takeLock } from "./lock.mjs";
+import { ensureNodeModules } from "./node-modules.mjs";
+import { chooseWebPort, readPort } from "./ports.mjs";
+import { ensureCluster } from "./postgres.mjs";
+import { endServers } from "./postgres-server.mjs";
+import { isAlive } from "./processes.mjs";
+import { keptPorts, keptSecrets } from "./secrets.mjs";
+import { createSupervisor } from "./supervisor.mjs";
+import { Problem, say, tellFailure } from "./words.mjs";
+
+/** Everything that must be ended, filled in as the start goes on. */
+const house = { lock: null, supervisor: null, cluster: null, children: [], address: null, stopping: false };
+
+/** Ends web server, workers, mail and PostgreSQL, in this order and within four seconds, and then this process. */
+async function stop(code, reason) {
+  if (house.stopping) return;
+  house.stopping = true;
+  say(reason);
+  house.supervisor?.hold();
+  await endCommands(500);
+  await Promise.all([house.supervisor?.end("web", 1_300), house.supervisor?.end("worker", 1_300)]);
+  await house.supervisor?.end("mail", 300);
+  await endServers(1_000);
+  house.lock?.release();
+  say("Everything has ended.");
+  process.exit(code);
+}
+
+function checkRights(dataDir) {
+  try {
+    accessSync(treeDir, constants.R_OK | constants.W_OK | constants.X_OK);
+  } catch {
+    throw new Problem(`This account may not write to ${treeDir}, where packages, build and data are kept.`);
+  }
+  ensureDataDir(join(treeDir, ".data"));
+  ensureDataDir(dataDir);
+}
+
+async function takeHouse(dataDir) {
+  const lock = takeLock(join(dataDir, "start.lock"));
+  if (!lock.taken) {
+    const where = lock.holder.address ? ` at ${lock.holder.address}` : "";
+    throw new Problem(`Dwellbook already runs from this folder${where} (process ${lock.holder.pid}).`);
+  }
+  house.lock = lock;
+  await endLeftovers(lock.before);
+}
+
+/** Writes down what runs, for a second start to name and for a later one to clear up. */
+function noteState() {
+  if (!house.stopping) house.lock?.amend({ address: house.address, children: house.children });
+}
+
+async function prepareDatabase(dataDir, env) {
+  if (env.DATABASE_URL) {
+    say("Using the database in DATABASE_URL.");
+    return {
+      databaseUrl: env.DATABASE_URL,
+      ownerUrl: env.DATABASE_OWNER_URL || env.DATABASE_URL,
+      outside: true,
+    };
+  }
+  say("Making sure of PostgreSQL …");
+  const cluster = await ensureCluster({ dataDir });
+  house.cluster = cluster;
+  say(`PostgreSQL ${cluster.adopted ? "was running" : "runs"} on loopback port ${cluster.port}.`);
+  return { databaseUrl: cluster.databaseUrl, ownerUrl: cluster.ownerUrl, outside: false };
+}
+
+async function fillDatabase(env, outside) {
+  say("Bringing the database up to date …");
+  await migrate(env);
+  if (outside && env.DWELLBOOK_DEMO !== "1" && !(await hasNoPeople(env.DATABASE_URL))) return;
+  say("Preparing the demo (all of it invented) …");
+  await seedDemo(env);
+}
+
+/** PostgreSQL is watched too; on the same port it comes back, on another one the others could not find it. */
+function watchCluster(dataDir) {
+  let busy = false;
+  const look = async () => {
+    if (busy || house.stopping || isAlive(house.cluster.pid)) return;
+    busy = true;
+    say("PostgreSQL ended; starting it again.");
+    const { port } = house.cluster;
+    house.cluster = await ensureCluster({ dataDir });
+    if (house.cluster.port !== port) throw new Problem("PostgreSQL's port was taken meanwhile; start again.");
+    busy = false;
+  };
+  setInterval(() => look().catch(fail), 500).unref();
+}
+
+function startParts(env, port, mail) {
+  const node = process.execPath;
+  const { supervisor } = house;
+  if (mail) {
+    const mailEnv = { ...env, MAIL_SMTP_PORT: String(mail.smtp), MAIL_PAGE_PORT: String(mail.mailPage) };
+    supervisor.keep({
+      name: "mail",
+      command: node,
+      args: [join(treeDir, "lib/run/mail-fake/main.mjs")],
+      env: mailEnv,
+    });
+  }
+  const worker = ["--import", "tsx", join(treeDir, "lib/jobs/worker-main.ts")];
+  for (let at = 1; at <= workerCount(env.DWELLBOOK_WORKERS); at += 1) {
+    supervisor.keep({ name: `worker ${at}`, command: node, args: worker, env });
+  }
+  const next = join(treeDir, "node_modules/next/dist/bin/next");
+  const args = [next, "start", "-H", "127.0.0.1", "-p", String(port)];
+  supervisor.keep({ name: "web server", command: node, args, env });
+}
+
+function announce(env, dataDir, mail) {
+  const lines = ["", `Dwellbook is ready: ${house.address}`];
+  if (mail) lines.push(`Its mail, which stays on this machine: ${env.DWELLBOOK_MAIL_PAGE_URL}`);
+  const table = readAccessTable(dataDir);
+  if (table !== "") lines.push("", "Demo sign-ins:", table);
+  lines.push("", `Logs are in ${join(dataDir, "logs")}. Ctrl-C ends all of it.`, "");
+  process.stdout.write(`${lines.join("\n")}\n`);
+}
+
+async function start() {
+  const dataDir = dataDirOf();
+  const asked = readPort(process.env.PORT);
+  workerCount(process.env.DWELLBOOK_WORKERS);
+  checkRights(dataDir);
+  await takeHouse(dataDir);
+  const { port, insteadOf } = await chooseWebPort(asked);
+  if (insteadOf) say(`Port ${insteadOf} is taken by another program; using ${port}.`);
+  await ensureNodeModules();
+  const { outside, ...urls } = await prepareDatabase(dataDir, process.env);
+  const mail = process.env.SMTP_URL ? null : await keptPorts(dataDir);
+  const secrets = keptSecrets(dataDir);
+  const env = childEnvironment({ surroundings: process.env, dataDir, port, ...urls, secrets, mail });
+  await fillDatabase(env, outside);
+  await ensureBuild(env);
+  await startAndWait({ env, dataDir, port, mail });
+}
+
+async function startAndWait({ env, dataDir, port, mail }) {
+  if (house.stopping) return;
+  say("Starting web server, workers and mail …");
+  house.address = `http://127.0.0.1:${port}`;
+  const logDir = join(dataDir, "logs");
+  ensureFolder(logDir);
+  const onChange = (children) => {
+    house.children = children;
+    noteState();
+  };
+  house.supervisor = createSupervisor({ logDir, onChange });
+  if (house.cluster) watchCluster(dataDir);
+  startParts(env, port, mail);
+  const health = await waitForHealth(house.address, 120_000, () => house.stopping);
+  if (house.stopping) return;
+  if (!health.ok) {
+    const words = house.supervisor.lastWords("web server");
+    throw new Problem(
+      `Dwellbook did not get well within two minutes: ${health.words}.\nThe web server's last words:\n${words}`,
+    );
+  }
+  announce(env, dataDir, mail);
+}
+
+function fail(error) {
+  if (house.stopping) return;
+  tellFailure(error);
+  void stop(1, "Ending what was started …");
+}
+
+/** Sets everything up, runs the product and stays with it until a signal ends it. */
+export function runProduct() {
+  for (const signal of ["SIGINT", "SIGTERM", "SIGHUP"]) {
+    process.on(signal, () => void stop(0, `Ending (${signal}) …`));
+  }
+  process.on("uncaughtException", fail);
+  process.on("unhandledRejection", fail);
+  whenGone(keepers(), () => void stop(0, "npm has gone; ending …"));
+  start().catch(fail);
+}
