@@ -1,4 +1,5 @@
 import { boolean, doublePrecision, index, integer, jsonb, pgTable, text, uuid } from "drizzle-orm/pg-core";
+import type { StoredPlan } from "@/lib/planning/stored-plan";
 import { identifier, instant } from "../columns";
 import { elementSets, fragments, protectedObjects } from "./objects";
 import { laserSettings, stations } from "./stations";
@@ -35,27 +36,6 @@ export const sweepChunks = pgTable(
   },
   (t) => [index("sweep_chunks_sweep").on(t.sweepId)],
 );
-
-/** What a worker worked out for a pass: enough to draw it in a list without propagating again. */
-export interface StoredPlan {
-  readonly laserSettingVersion: number;
-  readonly aim: string;
-  readonly aimUnit: string;
-  /** Points of the small strip, evenly spaced from rise to set. */
-  readonly strip: { readonly elevationDeg: number[]; readonly worthPerS: number[] };
-  /** The best dwell under the closures known then; read again through the rules before it is offered. */
-  readonly dwell: {
-    readonly fromMs: number;
-    readonly toMs: number;
-    readonly perigeeDropM: number;
-    readonly semiMajorAxisDropM: number;
-    readonly perigeeDropBandM: readonly [number, number];
-    readonly semiMajorAxisDropBandM: readonly [number, number];
-    readonly gain: number;
-  } | null;
-  /** Why nothing could be worked out, when that is so. */
-  readonly refusal: string | null;
-}
 
 /** Rise, culmination and set of one fragment over one station. */
 export const passes = pgTable(
