@@ -14,8 +14,11 @@ export function checkTleLine(line: TextLine, which: 1 | 2): Fault[] {
   if (odd) return [at(odd.index + 1, strangeCharacter(odd[0]))];
   const length = lengthFault(line.text, which);
   const faults = fieldFaults(line.text, which).map((f) => at(f.column, f.message));
-  // In a line that is too short or shifted, the first field out of place tells most; the rest follows from it.
-  if (length) return [at(length.column, length.message), ...faults.slice(0, 1)];
+  if (length) {
+    // A shifted line has many fields out of place: the first tells most, the rest follows from it.
+    const both = [at(length.column, length.message), ...faults.slice(0, 1)];
+    return line.text.length < COLUMNS ? both : both.sort((a, b) => a.column - b.column);
+  }
   const sum = checksumMessage(line.text, which);
   return sum ? [...faults, at(COLUMNS, sum)] : faults;
 }

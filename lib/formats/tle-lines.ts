@@ -13,25 +13,26 @@ export type TleGroup =
     }
   | { readonly kind: "no second"; readonly name: TextLine | null; readonly first: TextLine }
   | { readonly kind: "no first"; readonly name: TextLine | null; readonly second: TextLine }
-  | { readonly kind: "stray"; readonly lines: readonly [TextLine, ...TextLine[]] };
+  | { readonly kind: "stray"; readonly lines: [TextLine, ...TextLine[]] };
 
 type Kind = "one" | "two" | "damaged" | "text";
 
-/** A name such as "1 EXPLORER" begins like a line 1 but is far shorter than any element line. */
+/** A name such as "1 EXPLORER" begins like an element line but is far shorter and has no catalogue number. */
 const LONGEST_NAME_LIKE = 30;
+const BEGINS_WITH_NUMBER = /^[12] [0-9A-Z]\d{4}/;
 
 /** Any other line this long and this full of digits is an element line whose first column is spoilt. */
 const SHORTEST_DAMAGED = 55;
 const DIGITS_IN_DAMAGED = 30;
 
-function kindOf(line: TextLine | undefined, next: TextLine | undefined): Kind {
-  if (!line) return "text";
-  const lead = line.text.slice(0, 2);
-  const nameLike = line.text.length < LONGEST_NAME_LIKE && next?.text.startsWith("1 ") === true;
+function kindOf(text: string, before: Kind | undefined, next: TextLine | undefined): Kind {
+  const lead = text.slice(0, 2);
+  const aheadOfSet = next?.text.startsWith("1 ") === true && before !== "one";
+  const nameLike = aheadOfSet && text.length < LONGEST_NAME_LIKE && !BEGINS_WITH_NUMBER.test(text);
   if (lead === "1 " && !nameLike) return "one";
-  if (lead === "2 ") return "two";
-  const digits = line.text.replace(/[^0-9]/g, "").length;
-  return line.text.length >= SHORTEST_DAMAGED && digits >= DIGITS_IN_DAMAGED ? "damaged" : "text";
+  if (lead === "2 " && !nameLike) return "two";
+  const digits = text.replace(/[^0-9]/g, "").length;
+  return text.length >= SHORTEST_DAMAGED && digits >= DIGITS_IN_DAMAGED ? "damaged" : "text";
 }
 
 function sameNumber(a: TextLine, b: TextLine): boolean {
@@ -50,15 +51,16 @@ function isContent(line: TextLine): boolean {
  */
 export function groupTleLines(all: readonly TextLine[]): TleGroup[] {
   const lines = all.filter(isContent);
-  const kinds = lines.map((line, i) => kindOf(line, lines[i + 1]));
+  const kinds: Kind[] = [];
+  for (const [i, line] of lines.entries()) kinds.push(kindOf(line.text, kinds[i - 1], lines[i + 1]));
   const groups: TleGroup[] = [];
   let at = 0;
   while (at < lines.length) {
     const { group, used } = nextGroup(lines, kinds, at);
     const last = groups.at(-1);
-    if (group.kind === "stray" && last?.kind === "stray") {
-      groups[groups.length - 1] = { kind: "stray", lines: [...last.lines, ...group.lines] };
-    } else groups.push(group);
+    // Appended in place: a file of a million stray lines must not be copied a million times.
+    if (group.kind === "stray" && last?.kind === "stray") last.lines.push(...group.lines);
+    else groups.push(group);
     at += used;
   }
   return groups;
