@@ -15,9 +15,12 @@ export interface ClosureBody extends SpanBody {
   readonly rule: string;
   readonly verdict: Verdict;
   readonly cause: string;
+  /** Two to four words for the strip: "payload QS-88, 1.9°". */
+  readonly label: string;
   /** Which record, and which version of it, says so. */
   readonly input: string;
   readonly liftedBy: string;
+  /** For "not checked": a person's attested word may stand in. Never for crewed spacecraft. */
   readonly overridable: boolean;
 }
 
@@ -48,9 +51,12 @@ export interface PassBody {
   readonly maxElevationDeg: number;
   readonly minRangeKm: number;
   readonly openings: readonly OpeningBody[];
+  /** The best dwell that may be booked now; null with noDwellReason, and while an engagement holds the pass. */
   readonly dwell: DwellBody | null;
   readonly engagementId: string | null;
   readonly engagementState: string | null;
+  /** The dwell of that engagement. */
+  readonly booked: SpanBody | null;
   /** The closures merged by verdict, for the small strip. */
   readonly closures: readonly ClosureBody[];
   readonly strip: { readonly elevationDeg: readonly number[]; readonly worthPerS: readonly number[] };
