@@ -1,7 +1,7 @@
 import { sql } from "drizzle-orm";
 import type { Queryable } from "@/db/client";
 
-/** How a job may be held back, replaced or limited. */
+/** How a job may be held back, replaced, ranked or limited. */
 export interface JobOptions {
   /** A waiting job under the same key is replaced instead of added twice. */
   readonly jobKey?: string;
@@ -11,6 +11,8 @@ export interface JobOptions {
   readonly maxAttempts?: number;
   /** Jobs of one queue name run one after the other. */
   readonly queueName?: string;
+  /** Smaller runs first; 0 unless told. Bulk work takes more, so that mail never waits behind it. */
+  readonly priority?: number;
 }
 
 /**
@@ -31,5 +33,24 @@ export async function addJob(
       queue_name => ${options.queueName ?? null}::text,
       run_at => ${runAt}::timestamptz,
       max_attempts => ${options.maxAttempts ?? null}::int,
-      job_key => ${options.jobKey ?? null}::text)`);
+      job_key => ${options.jobKey ?? null}::text,
+      priority => ${options.priority ?? null}::int)`);
+}
+
+/** Adds many jobs of one task in a single statement, all with the same rank; as {@link addJob}. */
+export async function addJobs(
+  q: Queryable,
+  task: string,
+  jobs: readonly { payload: Record<string, unknown>; jobKey: string }[],
+  options: Pick<JobOptions, "priority" | "maxAttempts"> = {},
+): Promise<void> {
+  if (jobs.length === 0) return;
+  await q.execute(sql`
+    select count(added.id) from json_array_elements(${JSON.stringify(jobs)}::json) as each(job),
+      lateral graphile_worker.add_job(
+        identifier => ${task}::text,
+        payload => each.job -> 'payload',
+        max_attempts => ${options.maxAttempts ?? null}::int,
+        job_key => each.job ->> 'jobKey',
+        priority => ${options.priority ?? null}::int) as added`);
 }
