@@ -1,0 +1,130 @@
+import type { OrbitState } from "@/lib/physics/orbit/propagate";
+import { gravityKmPerS2 } from "./gravity";
+import type { Track, TrackPoint } from "./track";
+
+/** What a laser does to a fragment, as far as the orbit is concerned. */
+export interface Push {
+  readonly repetitionRateHz: number;
+  /** Velocity change in m/s away from the station by one pulse, at a range in km and an elevation in radians. */
+  deltaVPerPulseMPerS(rangeKm: number, elevationRad: number): number;
+}
+
+/** How far a nudged fragment has moved from its untouched path, and what it was given on the way. */
+export interface Deviation {
+  /** Position off the path, km, and velocity, km/s. */
+  x: number;
+  y: number;
+  z: number;
+  vx: number;
+  vy: number;
+  vz: number;
+  /** Sums of the velocity changes along the axes of each moment, m/s. */
+  radial: number;
+  transverse: number;
+  normal: number;
+}
+
+/** A fragment that nothing has touched yet. */
+export function noDeviation(): Deviation {
+  return { x: 0, y: 0, z: 0, vx: 0, vy: 0, vz: 0, radial: 0, transverse: 0, normal: 0 };
+}
+
+/**
+ * Number of pulses between two times (s after the first pulse), the earlier included and the later not.
+ * The tolerance keeps 10 s at 10 Hz at 100 pulses whatever the last digit of the product.
+ */
+export function pulsesBetween(repetitionRateHz: number, fromS: number, toS: number): number {
+  const before = (s: number): number => Math.ceil(s * repetitionRateHz - 1e-6);
+  return before(toS) - before(fromS);
+}
+
+/**
+ * Lases from `fromMs` to `toMs` on top of a deviation, in steps of at most 1 s that end on whole UTC
+ * seconds, and changes the deviation in place. In each step the pulses' velocity change acts in the
+ * middle, along the line from the station to where the nudged fragment really is; the deviation itself
+ * moves under the difference of gravity between nudged and untouched place (Encke's method, leapfrog).
+ * So the path stays SGP4's, and the nudge is exact to the second order of a one-second step.
+ */
+export function lase(
+  deviation: Deviation,
+  track: Track,
+  push: Push,
+  span: {
+    readonly fromMs: number;
+    readonly toMs: number;
+    readonly firstPulseMs: number;
+    readonly whole: boolean;
+  },
+): void {
+  for (let startMs = span.fromMs; startMs < span.toMs; ) {
+    const second = Math.floor(startMs / 1000);
+    const endMs = Math.min(span.toMs, (second + 1) * 1000);
+    const isWhole = endMs - startMs === 1000;
+    const middle = isWhole ? track.middleOfSecond(second) : track.at((startMs + endMs) / 2);
+    const [fromS, toS] = [(startMs - span.firstPulseMs) / 1000, (endMs - span.firstPulseMs) / 1000];
+    const pulses = span.whole
+      ? pulsesBetween(push.repetitionRateHz, fromS, toS)
+      : (toS - fromS) * push.repetitionRateHz;
+    advance(deviation, middle, push, toS - fromS, pulses);
+    startMs = endMs;
+  }
+}
+
+/** One step: drift half-way, kick by gravity's difference and the pulses, drift on. */
+function advance(d: Deviation, middle: TrackPoint, push: Push, stepS: number, pulses: number): void {
+  const { rKm: r, vKmPerS: v } = middle.state;
+  const half = stepS / 2;
+  d.x += d.vx * half;
+  d.y += d.vy * half;
+  d.z += d.vz * half;
+  const [x, y, z] = [r.x + d.x, r.y + d.y, r.z + d.z];
+  if (d.x !== 0 || d.y !== 0 || d.z !== 0) {
+    const nudged = gravityKmPerS2(x, y, z);
+    const untouched = gravityKmPerS2(r.x, r.y, r.z);
+    d.vx += (nudged.x - untouched.x) * stepS;
+    d.vy += (nudged.y - untouched.y) * stepS;
+    d.vz += (nudged.z - untouched.z) * stepS;
+  }
+  const { siteKm: s, up } = middle;
+  const [lx, ly, lz] = [x - s.x, y - s.y, z - s.z];
+  const rangeKm = Math.sqrt(lx * lx + ly * ly + lz * lz);
+  const elevationRad = Math.asin((lx * up.x + ly * up.y + lz * up.z) / rangeKm);
+  const kick = pulses * push.deltaVPerPulseMPerS(rangeKm, Math.max(0, elevationRad));
+  if (kick !== 0) applyKick(d, [x, y, z], [v.x + d.vx, v.y + d.vy, v.z + d.vz], [lx, ly, lz], kick / rangeKm);
+  d.x += d.vx * half;
+  d.y += d.vy * half;
+  d.z += d.vz * half;
+}
+
+type Triple = readonly [number, number, number];
+
+/** Adds a kick of `perKm` m/s per km along a line, and its parts along the axes of the moment. */
+function applyKick(d: Deviation, r: Triple, v: Triple, line: Triple, perKm: number): void {
+  const [kx, ky, kz] = [line[0] * perKm, line[1] * perKm, line[2] * perKm];
+  d.vx += kx * 1e-3;
+  d.vy += ky * 1e-3;
+  d.vz += kz * 1e-3;
+  const radius = Math.sqrt(r[0] * r[0] + r[1] * r[1] + r[2] * r[2]);
+  const radial = (kx * r[0] + ky * r[1] + kz * r[2]) / radius;
+  const hx = r[1] * v[2] - r[2] * v[1];
+  const hy = r[2] * v[0] - r[0] * v[2];
+  const hz = r[0] * v[1] - r[1] * v[0];
+  const h = Math.sqrt(hx * hx + hy * hy + hz * hz);
+  const normal = (kx * hx + ky * hy + kz * hz) / h;
+  // Transverse = normal × radial, so its part of the kick is k · (h × r) / (|h| |r|).
+  const tx = hy * r[2] - hz * r[1];
+  const ty = hz * r[0] - hx * r[2];
+  const tz = hx * r[1] - hy * r[0];
+  d.radial += radial;
+  d.normal += normal;
+  d.transverse += (kx * tx + ky * ty + kz * tz) / (h * radius);
+}
+
+/** The nudged state that belongs to an untouched one and a deviation at the same time. */
+export function deviated(untouched: OrbitState, d: Deviation): OrbitState {
+  const { rKm: r, vKmPerS: v } = untouched;
+  return {
+    rKm: { x: r.x + d.x, y: r.y + d.y, z: r.z + d.z },
+    vKmPerS: { x: v.x + d.vx, y: v.y + d.vy, z: v.z + d.vz },
+  };
+}

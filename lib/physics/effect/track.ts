@@ -1,0 +1,167 @@
+import { DEG } from "@/lib/physics/constants";
+import { type SiteFrame, siteStateTeme } from "@/lib/physics/frames/earth";
+import type { Orbit, OrbitState } from "@/lib/physics/orbit/propagate";
+import { isoTime } from "@/lib/physics/time";
+import type { Vec3 } from "@/lib/physics/vector";
+import { gravityKmPerS2 } from "./gravity";
+
+/** Longest span that one track covers. */
+const MAX_SPAN_MS = 24 * 3600_000;
+
+/** Distance of the SGP4 states that the track interpolates between. At 10 s the error is under a millimetre. */
+const NODE_SPACING_MS = 10_000;
+
+/** A fragment this little under the horizon still counts as on it: rise times are good to a millisecond. */
+const HORIZON_TOLERANCE_RAD = 0.01 * DEG;
+
+/** The untouched fragment and the station at one time, TEME; `up` is the station's geodetic vertical. */
+export interface TrackPoint {
+  readonly state: OrbitState;
+  readonly siteKm: Vec3;
+  readonly up: Vec3;
+}
+
+/** The untouched path of a fragment over a station, quick to evaluate anywhere in its span. */
+export interface Track {
+  readonly fromMs: number;
+  readonly toMs: number;
+  /** The point at a time within the span. */
+  at(atMs: number): TrackPoint;
+  /** The point in the middle of the whole UTC second that begins at `second` (Unix seconds), kept. */
+  middleOfSecond(second: number): TrackPoint;
+}
+
+interface Node {
+  readonly state: OrbitState;
+  readonly acceleration: Vec3;
+}
+
+/**
+ * A track from SGP4 states every 10 s, with quintic Hermite interpolation between (position and velocity
+ * of SGP4, acceleration by mass and J2). Refused with a sentence when the span is empty or too long, when
+ * propagation fails, or when the fragment is below the station's horizon in it.
+ */
+export function makeTrack(
+  orbit: Orbit,
+  frame: SiteFrame,
+  fromMs: number,
+  toMs: number,
+): { ok: true; track: Track } | { ok: false; reason: string } {
+  const fault = spanFault(fromMs, toMs);
+  if (fault) return { ok: false, reason: fault };
+  // A second beyond the end, so that the last whole second has a middle.
+  const startMs = fromMs - 1000;
+  const count = Math.max(1, Math.ceil((toMs + 1000 - startMs) / NODE_SPACING_MS));
+  const spacingMs = (toMs + 1000 - startMs) / count;
+  const nodes: Node[] = [];
+  for (let i = 0; i <= count; i++) {
+    const at = orbit.stateAt(startMs + i * spacingMs);
+    if (!at.ok) return { ok: false, reason: at.reason };
+    const { x, y, z } = at.state.rKm;
+    nodes.push({ state: at.state, acceleration: gravityKmPerS2(x, y, z) });
+  }
+  const track = trackOf(nodes, startMs, spacingMs, frame, fromMs, toMs);
+  const lowMs = firstBelowHorizon(track);
+  if (lowMs === null) return { ok: true, track };
+  return {
+    ok: false,
+    reason: `The fragment is below the station's horizon at ${isoTime(lowMs)}: the model covers elevations from 0 upwards.`,
+  };
+}
+
+function spanFault(fromMs: number, toMs: number): string | null {
+  if (!Number.isFinite(fromMs) || !Number.isFinite(toMs)) return "The times from and to must be dates.";
+  if (toMs <= fromMs) return "The time to must be later than from: the span is empty.";
+  if (toMs - fromMs > MAX_SPAN_MS) return "The time to may be at most 24 hours after from.";
+  return null;
+}
+
+function trackOf(
+  nodes: readonly Node[],
+  startMs: number,
+  spacingMs: number,
+  frame: SiteFrame,
+  fromMs: number,
+  toMs: number,
+): Track {
+  const at = (atMs: number): TrackPoint => {
+    const place = (atMs - startMs) / spacingMs;
+    const index = Math.max(0, Math.min(nodes.length - 2, Math.floor(place)));
+    const [before, after] = [nodes[index], nodes[index + 1]];
+    if (!before || !after) throw new RangeError("A track has at least two nodes.");
+    const state = interpolate(before, after, place - index, spacingMs / 1000);
+    return { state, ...siteAt(frame, atMs) };
+  };
+  const kept: TrackPoint[] = [];
+  const firstSecond = Math.floor(fromMs / 1000);
+  return {
+    fromMs,
+    toMs,
+    at,
+    middleOfSecond: (second) => {
+      const index = second - firstSecond;
+      const known = kept[index];
+      if (known) return known;
+      const point = at(second * 1000 + 500);
+      if (index >= 0) kept[index] = point;
+      return point;
+    },
+  };
+}
+
+/** Station and vertical in TEME, the vertical turned by the same sidereal angle. */
+function siteAt(frame: SiteFrame, atMs: number): { siteKm: Vec3; up: Vec3 } {
+  const siteKm = siteStateTeme(frame, atMs).rKm;
+  const { positionKm: p, up: u } = frame;
+  const level2 = p.x * p.x + p.y * p.y;
+  // At a pole the vertical is the axis and does not turn.
+  if (level2 === 0) return { siteKm, up: u };
+  const c = (p.x * siteKm.x + p.y * siteKm.y) / level2;
+  const s = (p.x * siteKm.y - p.y * siteKm.x) / level2;
+  return { siteKm, up: { x: c * u.x - s * u.y, y: s * u.x + c * u.y, z: u.z } };
+}
+
+function interpolate(a: Node, b: Node, share: number, spacingS: number): OrbitState {
+  const [rA, rB, vA, vB] = [a.state.rKm, b.state.rKm, a.state.vKmPerS, b.state.vKmPerS];
+  const x = hermite(rA.x, vA.x, a.acceleration.x, rB.x, vB.x, b.acceleration.x, share, spacingS);
+  const y = hermite(rA.y, vA.y, a.acceleration.y, rB.y, vB.y, b.acceleration.y, share, spacingS);
+  const z = hermite(rA.z, vA.z, a.acceleration.z, rB.z, vB.z, b.acceleration.z, share, spacingS);
+  return { rKm: { x: x.value, y: y.value, z: z.value }, vKmPerS: { x: x.rate, y: y.rate, z: z.rate } };
+}
+
+/** Quintic through value, rate and second rate at both ends; `t` from 0 to 1 over `s` seconds. */
+function hermite(
+  r0: number,
+  v0: number,
+  a0: number,
+  r1: number,
+  v1: number,
+  a1: number,
+  t: number,
+  s: number,
+): { value: number; rate: number } {
+  const [c0, c1, c2] = [r0, v0 * s, 0.5 * a0 * s * s];
+  const miss = r1 - c0 - c1 - c2;
+  const missRate = v1 * s - c1 - 2 * c2;
+  const missSecond = a1 * s * s - 2 * c2;
+  const c3 = 10 * miss - 4 * missRate + 0.5 * missSecond;
+  const c4 = -15 * miss + 7 * missRate - missSecond;
+  const c5 = 6 * miss - 3 * missRate + 0.5 * missSecond;
+  return {
+    value: c0 + t * (c1 + t * (c2 + t * (c3 + t * (c4 + t * c5)))),
+    rate: (c1 + t * (2 * c2 + t * (3 * c3 + t * (4 * c4 + t * 5 * c5)))) / s,
+  };
+}
+
+/** First time, to 10 s and at the ends, at which the fragment stands under the horizon; null when it never does. */
+function firstBelowHorizon(track: Track): number | null {
+  const steps = Math.max(1, Math.ceil((track.toMs - track.fromMs) / NODE_SPACING_MS));
+  for (let i = 0; i <= steps; i++) {
+    const atMs = track.fromMs + (i * (track.toMs - track.fromMs)) / steps;
+    const { state, siteKm, up } = track.at(atMs);
+    const [x, y, z] = [state.rKm.x - siteKm.x, state.rKm.y - siteKm.y, state.rKm.z - siteKm.z];
+    const sine = (x * up.x + y * up.y + z * up.z) / Math.sqrt(x * x + y * y + z * z);
+    if (!(sine >= -Math.sin(HORIZON_TOLERANCE_RAD))) return atMs;
+  }
+  return null;
+}
