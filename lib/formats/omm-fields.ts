@@ -141,7 +141,8 @@ function readNumbers(
       numbers[key] = required ? Number.NaN : 0;
       continue;
     }
-    const value = NUMBER_FORM.test(text) ? Number(text) : Number.NaN;
+    // Adding 0 makes 0 of -0, which no form could carry further.
+    const value = NUMBER_FORM.test(text) ? Number(text) + 0 : Number.NaN;
     numbers[key] = value;
     if (Number.isFinite(value)) continue;
     report(

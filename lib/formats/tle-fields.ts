@@ -83,8 +83,13 @@ export function textOf(line: string, f: TleField): string {
   return line.slice(f.from - 1, f.to);
 }
 
+/** The number of a field with a decimal point. "-.00000000" gives 0, never -0: no form can carry that sign further. */
+export function readDecimal(text: string): number {
+  return Number(text) + 0;
+}
+
 /** The number of an exponent field: " 12345-4" is 0.12345e-4. The form must have been checked. */
 export function readExponent(text: string): number {
-  const sign = text.startsWith("-") ? -1 : 1;
-  return sign * Number(`0.${text.slice(1, 6)}e${text.slice(6)}`);
+  const sign = text.startsWith("-") ? "-" : "";
+  return readDecimal(`${sign}0.${text.slice(1, 6)}e${text.slice(6)}`);
 }

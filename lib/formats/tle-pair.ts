@@ -6,7 +6,7 @@ import { checkObjectText } from "./object-text";
 import type { Fault } from "./set-types";
 import type { TextLine } from "./text-lines";
 import { fullYear, readTleEpoch } from "./tle-epoch";
-import { LINE1, LINE2, readExponent, type TleField, textOf } from "./tle-fields";
+import { LINE1, LINE2, readDecimal, readExponent, type TleField, textOf } from "./tle-fields";
 import { checkTleLine } from "./tle-line-check";
 import type { TleGroup } from "./tle-lines";
 
@@ -67,7 +67,7 @@ function nameFaults(line: TextLine | null): Fault[] {
 /** The form must have been checked: values that are still out of sense come out as NaN. */
 function elementsOf({ name, first, second }: TlePair): Elements {
   const one = (f: TleField): string => textOf(first.text, f);
-  const two = (f: TleField): number => Number(textOf(second.text, f));
+  const two = (f: TleField): number => readDecimal(textOf(second.text, f));
   return {
     catalogNumber: readTleCatalogNumber(one(LINE1.catalogNumber)) ?? Number.NaN,
     objectName: nameOf(name),
@@ -80,7 +80,7 @@ function elementsOf({ name, first, second }: TlePair): Elements {
     argPericenterDeg: two(LINE2.argPericenter),
     meanAnomalyDeg: two(LINE2.meanAnomaly),
     bstar: readExponent(one(LINE1.bstar)),
-    meanMotionDot: Number(one(LINE1.meanMotionDot)),
+    meanMotionDot: readDecimal(one(LINE1.meanMotionDot)),
     meanMotionDdot: readExponent(one(LINE1.meanMotionDdot)),
   };
 }
