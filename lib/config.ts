@@ -2,6 +2,7 @@ import { z } from "zod";
 
 /** The only reader of the environment outside tool configurations and lib/run. */
 const schema = z.object({
+  NODE_ENV: z.string().default("production"),
   DATABASE_URL: z.string().min(1).default("postgres://dwellbook_app@127.0.0.1:5432/dwellbook"),
   DATABASE_OWNER_URL: z.string().optional(),
   DATABASE_POOL_SIZE: z.coerce.number().int().min(1).max(200).default(20),

@@ -1,0 +1,32 @@
+import { FetchError } from "@/app/_client/fetch-json";
+
+interface ErrorNoteProps {
+  /** What was thrown, usually a FetchError with all reasons. Nothing is shown for null and undefined. */
+  readonly error: unknown;
+  /** What failed: "The dwell was not booked". */
+  readonly title?: string;
+}
+
+/** A refusal or failure in words, with every reason; announced at once. */
+export function ErrorNote({ error, title }: ErrorNoteProps) {
+  if (error === null || error === undefined) return null;
+  const { message, details } = wordsOf(error);
+  return (
+    <div role="alert" className="max-w-[75ch] border-l-4 border-dwell bg-sheet px-3 py-2">
+      <p className="font-semibold">{title ?? message}</p>
+      {title ? <p>{message}</p> : null}
+      {details.length > 0 ? (
+        <ul className="mt-1 list-disc pl-5">
+          {details.map((d) => (
+            <li key={`${d.path} ${d.message}`}>{d.message}</li>
+          ))}
+        </ul>
+      ) : null}
+    </div>
+  );
+}
+
+function wordsOf(error: unknown) {
+  if (error instanceof FetchError) return { message: error.message, details: error.details };
+  return { message: error instanceof Error ? error.message : String(error), details: [] };
+}

@@ -1,0 +1,43 @@
+import Link from "next/link";
+import type { PersonActor } from "@/lib/services/authenticate";
+import { Clock } from "./clock";
+import { navFor } from "./nav-items";
+import { NavPanel } from "./nav-panel";
+import { SignOutButton } from "./sign-out-button";
+import type { Theme } from "./theme";
+import { ThemeSwitch } from "./theme-switch";
+
+interface HeaderProps {
+  readonly person: PersonActor | null;
+  readonly theme: Theme;
+  readonly nowMs: number;
+}
+
+/** Mark, clock, theme and who is signed in; below, the pages this person may open. */
+export function Header({ person, theme, nowMs }: HeaderProps) {
+  const items = person ? navFor(person).map(({ href, label }) => ({ href, label })) : [];
+  return (
+    <header className="border-b border-line">
+      <div className="flex flex-wrap items-center gap-x-7 gap-y-1 px-4 pt-3 sm:px-7">
+        <Link href="/" className="text-[1.3125rem] font-[760] tracking-tight">
+          Dwellbook
+        </Link>
+        <div className="ml-auto">
+          <Clock nowMs={nowMs} />
+        </div>
+      </div>
+      <NavPanel items={items}>
+        <ThemeSwitch initial={theme} />
+        {person ? (
+          <div className="flex items-baseline gap-3">
+            <Link href="/account" className="link">
+              {person.name}
+            </Link>
+            <span className="text-[0.8125rem] text-quiet">{person.role}</span>
+            <SignOutButton />
+          </div>
+        ) : null}
+      </NavPanel>
+    </header>
+  );
+}
