@@ -19,12 +19,12 @@ export function proxy(request: NextRequest): NextResponse {
 }
 
 function contentPolicy(nonce: string): string {
-  // React's development build explains server errors through eval.
-  const development = environment().NODE_ENV === "development" ? " 'unsafe-eval'" : "";
+  // React's development build explains server errors through eval, and its overlay writes styles.
+  const development = environment().NODE_ENV === "development";
   return [
     "default-src 'self'",
-    `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'${development}`,
-    `style-src 'self' 'nonce-${nonce}'`,
+    `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'${development ? " 'unsafe-eval'" : ""}`,
+    development ? "style-src 'self' 'unsafe-inline'" : `style-src 'self' 'nonce-${nonce}'`,
     // The calendar and charts place things by style attributes.
     "style-src-attr 'unsafe-inline'",
     "img-src 'self' data: blob:",
