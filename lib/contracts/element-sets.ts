@@ -1,3 +1,6 @@
+import { z } from "zod";
+import { identifierText } from "./common";
+
 /** The report of POST /api/element-sets. */
 export interface ImportReportBody {
   readonly accepted: number;
@@ -20,4 +23,54 @@ export interface ImportReportBody {
   readonly importId: string | null;
   /** The sweep that follows, so that the screen can show its progress. */
   readonly sweepId: string | null;
+}
+
+/** GET /api/element-sets: the history of one object, or the newest set of every object. */
+export const elementSetQuery = z.strictObject({
+  fragment: identifierText.optional(),
+  protected: identifierText.optional(),
+  catalogNumber: z.coerce.number().int().min(1).max(999_999_999).optional(),
+});
+
+/** How a text is imported. */
+export const importOptions = z
+  .strictObject({
+    as: z.enum(["fragments", "protected"]).default("fragments"),
+    /** The class of protected objects that are new. */
+    class: z.enum(["crewed", "payload", "optical payload", "own"]).optional(),
+    preview: z.boolean().default(false),
+  })
+  .superRefine((value, ctx) => {
+    if (value.as === "protected" && value.class === undefined) {
+      ctx.addIssue({ code: "custom", path: ["class"], message: "protected objects need their class" });
+    }
+  });
+export type ImportOptions = z.infer<typeof importOptions>;
+
+/** One stored element set. */
+export interface ElementSetBody {
+  readonly id: string;
+  readonly fragmentId: string | null;
+  readonly protectedObjectId: string | null;
+  /** The import that brought it; null for what came another way. */
+  readonly importId: string | null;
+  readonly catalogNumber: number;
+  readonly objectName: string | null;
+  readonly objectId: string | null;
+  readonly epochAt: string;
+  /** The same in Unix milliseconds with a fraction: microseconds survive. */
+  readonly epochMs: number;
+  readonly meanMotionRevPerDay: number;
+  readonly eccentricity: number;
+  readonly inclinationDeg: number;
+  readonly raanDeg: number;
+  readonly argPericenterDeg: number;
+  readonly meanAnomalyDeg: number;
+  readonly bstar: number;
+  readonly meanMotionDot: number;
+  readonly meanMotionDdot: number;
+  readonly format: string;
+  readonly raw: string;
+  readonly source: string;
+  readonly importedAt: string;
 }

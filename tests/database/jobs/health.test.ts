@@ -4,9 +4,9 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
 import { GET } from "@/app/api/health/route";
 import { database } from "@/db/client";
 import { beat } from "@/lib/services/heartbeat";
-import { useTestDatabase } from "../support";
+import { ownDatabase } from "../support";
 
-useTestDatabase();
+ownDatabase();
 
 /** What the mail server at SMTP_URL does with a caller; null: nothing at all. */
 let greeting: string | null = "220 test ESMTP\r\n";

@@ -3,9 +3,9 @@ import { describe, expect, it } from "vitest";
 import { database } from "@/db/client";
 import { inTransaction } from "@/db/transaction";
 import { addJob, addJobs } from "@/lib/services/queue";
-import { useTestDatabase } from "../support";
+import { ownDatabase } from "../support";
 
-useTestDatabase();
+ownDatabase();
 
 interface JobRow extends Record<string, unknown> {
   task_identifier: string;

@@ -5,9 +5,9 @@ import { countAlive, tryRoundsLock } from "@/db/queries/workers";
 import { inTransaction } from "@/db/transaction";
 import { beat, pruneWorkers, releaseSilentWorkers, signOff } from "@/lib/services/heartbeat";
 import { addJob } from "@/lib/services/queue";
-import { useTestDatabase } from "../support";
+import { ownDatabase } from "../support";
 
-useTestDatabase();
+ownDatabase();
 
 const worker = (poolId: string) => ({ poolId, host: "a-host", processId: 17 });
 

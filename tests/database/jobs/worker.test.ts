@@ -3,9 +3,9 @@ import { afterEach, describe, expect, it } from "vitest";
 import { database } from "@/db/client";
 import { type RunningWorker, startWorker } from "@/lib/jobs/worker";
 import { addJob } from "@/lib/services/queue";
-import { useTestDatabase } from "../support";
+import { ownDatabase } from "../support";
 
-useTestDatabase();
+ownDatabase();
 
 let worker: RunningWorker | undefined;
 afterEach(async () => {
