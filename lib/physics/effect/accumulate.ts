@@ -1,4 +1,5 @@
 import type { OrbitState } from "@/lib/physics/orbit/propagate";
+import { dot, norm, subtract } from "@/lib/physics/vector";
 import { gravityKmPerS2 } from "./gravity";
 import type { Track, TrackPoint } from "./track";
 
@@ -118,6 +119,13 @@ function applyKick(d: Deviation, r: Triple, v: Triple, line: Triple, perKm: numb
   d.radial += radial;
   d.normal += normal;
   d.transverse += (kx * tx + ky * ty + kz * tz) / (h * radius);
+}
+
+/** Range in km and elevation in radians, not below 0, of the untouched fragment at a point of its track. */
+export function elevationAndRange(point: TrackPoint): { rangeKm: number; elevationRad: number } {
+  const line = subtract(point.state.rKm, point.siteKm);
+  const rangeKm = norm(line);
+  return { rangeKm, elevationRad: Math.max(0, Math.asin(dot(line, point.up) / rangeKm)) };
 }
 
 /** The nudged state that belongs to an untouched one and a deviation at the same time. */

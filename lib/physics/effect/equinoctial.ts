@@ -1,5 +1,5 @@
 import type { OrbitState } from "@/lib/physics/orbit/propagate";
-import { cross, dot, norm, scale, type Vec3 } from "@/lib/physics/vector";
+import { add, cross, dot, norm, scale, type Vec3 } from "@/lib/physics/vector";
 import { eccentricityVector } from "./two-body";
 
 /**
@@ -46,6 +46,12 @@ function meanLongitude(x: number, y: number, h: number, k: number): number {
   const cosF = k + ((1 - k * k * beta) * x - h * k * beta * y) / root;
   const sinF = h + ((1 - h * h * beta) * y - h * k * beta * x) / root;
   return Math.atan2(sinF, cosF) + h * cosF - k * sinF;
+}
+
+/** Eccentricity vector of equinoctial elements, in the frame that they are counted in. */
+export function eccentricityVectorOf(elements: Equinoctial): Vec3 {
+  const { f, g } = planeAxes(elements.p, elements.q);
+  return add(scale(f, elements.k), scale(g, elements.h));
 }
 
 /** Unit vectors of the orbit plane from which longitudes are counted. */

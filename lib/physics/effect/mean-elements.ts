@@ -88,6 +88,12 @@ export function meanPerigeeAltitudeKm(mean: Equinoctial): number {
   return mean.semiMajorAxisKm * (1 - eccentricityOf(mean)) - EARTH_RADIUS_KM;
 }
 
+/** Mean elements some seconds later, moved along the orbit by the mean motion alone: a first guess. */
+export function drifted(mean: Equinoctial, seconds: number): Equinoctial {
+  const meanMotion = Math.sqrt(WGS72_MU_KM3_PER_S2 / mean.semiMajorAxisKm ** 3);
+  return { ...mean, meanLongitudeRad: mean.meanLongitudeRad + meanMotion * seconds };
+}
+
 function inRange(m: Equinoctial): boolean {
   const e2 = m.h * m.h + m.k * m.k;
   return (
