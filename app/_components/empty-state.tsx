@@ -12,7 +12,7 @@ interface EmptyStateProps {
 /** What a list says when it has nothing to show. */
 export function EmptyState({ title, children, action }: EmptyStateProps) {
   return (
-    <div className="sheet border-dashed px-5 py-8">
+    <div className="sheet max-w-3xl border-dashed px-5 py-8">
       <p className="text-base font-semibold">{title}</p>
       {children ? <div className="mt-1 max-w-[60ch] text-quiet">{children}</div> : null}
       {action ? <div className="mt-4">{action}</div> : null}

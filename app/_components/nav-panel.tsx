@@ -19,18 +19,20 @@ export function NavPanel({ items, children }: NavPanelProps) {
 
   return (
     <div className="px-4 pb-2 sm:px-7 lg:flex lg:items-end lg:justify-between lg:gap-8 lg:pb-0">
-      <button
-        type="button"
-        aria-expanded={open}
-        aria-controls="nav-panel"
-        onClick={() => setOpen(!open)}
-        className="mt-1 min-h-9 w-full rounded border border-quiet px-3 text-left font-semibold lg:hidden"
-      >
-        {open ? "Close menu" : `Menu: ${items.find((i) => isHere(path, i.href))?.label ?? "choose a page"}`}
-      </button>
+      {items.length > 0 ? (
+        <button
+          type="button"
+          aria-expanded={open}
+          aria-controls="nav-panel"
+          onClick={() => setOpen(!open)}
+          className="mt-1 min-h-9 w-full rounded border border-quiet px-3 text-left font-semibold lg:hidden"
+        >
+          {open ? "Close menu" : `Menu: ${items.find((i) => isHere(path, i.href))?.label ?? "choose a page"}`}
+        </button>
+      ) : null}
       <div
         id="nav-panel"
-        className={`${open ? "flex" : "hidden"} flex-col gap-4 py-3 lg:flex lg:grow lg:flex-row lg:flex-wrap lg:items-end lg:justify-between lg:gap-x-8 lg:gap-y-1 lg:py-0`}
+        className={`${open || items.length === 0 ? "flex" : "hidden"} flex-col gap-4 py-3 lg:flex lg:grow lg:flex-row lg:flex-wrap lg:items-end lg:justify-between lg:gap-x-8 lg:gap-y-1 lg:py-0`}
       >
         {items.length > 0 ? (
           <nav aria-label="Pages">
@@ -49,7 +51,7 @@ export function NavPanel({ items, children }: NavPanelProps) {
             </ul>
           </nav>
         ) : null}
-        <div className="flex flex-wrap items-center gap-x-6 gap-y-3 lg:py-1.5">{children}</div>
+        <div className="flex flex-wrap items-center gap-x-6 gap-y-3 lg:ml-auto lg:py-1.5">{children}</div>
       </div>
     </div>
   );

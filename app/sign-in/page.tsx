@@ -5,12 +5,18 @@ import { SignInForm } from "./sign-in-form";
 
 export const metadata = { title: "Sign in" };
 
+/** Why somebody lands here who was signed in a moment ago. */
+const ENDED = {
+  password: "Your password is changed. Sign in with the new one.",
+  sessions: "All your sessions have ended.",
+};
+
 interface SignInPageProps {
   readonly searchParams: Promise<Record<string, string | string[] | undefined>>;
 }
 
 export default async function SignInPage({ searchParams }: SignInPageProps) {
-  const { next, callbackUrl } = await searchParams;
+  const { next, callbackUrl, after } = await searchParams;
   const wanted = typeof next === "string" ? next : typeof callbackUrl === "string" ? callbackUrl : null;
   const returnTo = safeReturnPath(wanted);
   if (await currentPerson()) redirect(returnTo);
@@ -26,6 +32,7 @@ export default async function SignInPage({ searchParams }: SignInPageProps) {
       </div>
       <div className="sheet self-start p-5">
         <h2 className="mb-4 text-xl font-bold">Sign in</h2>
+        {after === "password" || after === "sessions" ? <p className="mb-4">{ENDED[after]}</p> : null}
         <SignInForm returnTo={returnTo} />
       </div>
     </div>

@@ -1,5 +1,6 @@
-import { and, eq, isNull, sql } from "drizzle-orm";
+import { and, asc, desc, eq, isNull, sql } from "drizzle-orm";
 import type { Queryable } from "../client";
+import { authorities } from "../schema/authorities";
 import { accessTokens, people } from "../schema/people";
 
 export type PersonRow = typeof people.$inferSelect;
@@ -57,4 +58,79 @@ export async function touchToken(q: Queryable, tokenId: string, at: Date): Promi
         sql`(${accessTokens.lastUsedAt} is null or ${accessTokens.lastUsedAt} < ${at}::timestamptz - interval '1 minute')`,
       ),
     );
+}
+
+/** A person with the name of their authority and the count of live tokens. */
+export interface PersonListRow {
+  readonly person: PersonRow;
+  readonly authorityName: string | null;
+  readonly liveTokens: number;
+}
+
+/** Everybody, active ones first, by name; or one person. */
+export async function listPeopleRows(q: Queryable, id?: string): Promise<PersonListRow[]> {
+  return q
+    .select({
+      person: people,
+      authorityName: authorities.name,
+      liveTokens: sql<number>`(select count(*)::int from ${accessTokens} t where t.person_id = ${people.id} and t.revoked_at is null)`,
+    })
+    .from(people)
+    .leftJoin(authorities, eq(authorities.id, people.authorityId))
+    .where(id === undefined ? undefined : eq(people.id, id))
+    .orderBy(desc(people.active), asc(people.name), asc(people.id));
+}
+
+/** Writes a change of a person; the session version rises with it, so that all sessions end. */
+export async function updatePerson(
+  q: Queryable,
+  id: string,
+  change: Partial<Pick<PersonRow, "role" | "authorityId" | "isSafetyOfficer" | "active" | "passwordHash">>,
+): Promise<PersonRow> {
+  const [row] = await q
+    .update(people)
+    .set({ ...change, sessionVersion: sql`${people.sessionVersion} + 1` })
+    .where(eq(people.id, id))
+    .returning();
+  if (!row) throw new Error("a person vanished while being changed");
+  return row;
+}
+
+/** A person's tokens that are not revoked, newest first. */
+export async function liveTokens(q: Queryable, personId: string): Promise<TokenRow[]> {
+  return q
+    .select()
+    .from(accessTokens)
+    .where(and(eq(accessTokens.personId, personId), isNull(accessTokens.revokedAt)))
+    .orderBy(desc(accessTokens.createdAt), desc(accessTokens.id));
+}
+
+/** Stores the hash of a new token. */
+export async function insertToken(
+  q: Queryable,
+  row: { personId: string; label: string; tokenHash: string },
+): Promise<TokenRow> {
+  const [made] = await q.insert(accessTokens).values(row).returning();
+  if (!made) throw new Error("the token was not stored");
+  return made;
+}
+
+/** Revokes one token of a person; null when there is no such live token. */
+export async function revokeTokenRow(q: Queryable, personId: string, id: string): Promise<TokenRow | null> {
+  const [row] = await q
+    .update(accessTokens)
+    .set({ revokedAt: sql`now()` })
+    .where(and(eq(accessTokens.id, id), eq(accessTokens.personId, personId), isNull(accessTokens.revokedAt)))
+    .returning();
+  return row ?? null;
+}
+
+/** Revokes all of a person's tokens; answers how many there were. */
+export async function revokeAllTokens(q: Queryable, personId: string): Promise<number> {
+  const rows = await q
+    .update(accessTokens)
+    .set({ revokedAt: sql`now()` })
+    .where(and(eq(accessTokens.personId, personId), isNull(accessTokens.revokedAt)))
+    .returning({ id: accessTokens.id });
+  return rows.length;
 }
