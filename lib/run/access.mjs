@@ -1,3 +1,4 @@
+import { chmodSync, existsSync } from "node:fs";
 import { join } from "node:path";
 import { readJson } from "./folders.mjs";
 
@@ -15,10 +16,20 @@ export function accessTable(entries) {
   return [line(header), line(widths.map((width) => "-".repeat(width))), ...rows.map(line)].join("\n");
 }
 
+const accessFile = (dataDir) => join(dataDir, "demo-access.json");
+
+/**
+ * Closes the file of demo sign-ins to other accounts: it holds passwords and tokens.
+ * @param {string} dataDir
+ */
+export function protectAccess(dataDir) {
+  if (existsSync(accessFile(dataDir))) chmodSync(accessFile(dataDir), 0o600);
+}
+
 /**
  * Reads the demo sign-ins of a data folder as a table.
  * @param {string} dataDir
  */
 export function readAccessTable(dataDir) {
-  return accessTable(readJson(join(dataDir, "demo-access.json")));
+  return accessTable(readJson(accessFile(dataDir)));
 }

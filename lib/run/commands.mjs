@@ -43,19 +43,18 @@ export function run(command, args, options = {}) {
  * Runs a command to its end with our own terminal as its input and output.
  * @param {string} command
  * @param {readonly string[]} args
- * @param {import("node:child_process").SpawnOptions} options
+ * @param {import("node:child_process").SpawnOptions & { limitMs?: number }} options limitMs ends it when it takes longer
  * @returns {Promise<number>} its exit code, -1 when it could not start or was killed
  */
 export function runShown(command, args, options = {}) {
+  const { limitMs, ...rest } = options;
   if (closed) return new Promise(() => {});
   return new Promise((done) => {
-    const child = spawn(command, args, {
-      ...options,
-      detached: true,
-      stdio: ["ignore", "inherit", "inherit"],
-    });
+    const child = spawn(command, args, { ...rest, detached: true, stdio: ["ignore", "inherit", "inherit"] });
     if (child.pid) running.add(child.pid);
+    const timer = limitMs && child.pid ? setTimeout(() => endGroup(child.pid, 1_000), limitMs) : undefined;
     const finish = (code) => {
+      clearTimeout(timer);
       running.delete(child.pid);
       done(code);
     };

@@ -39,6 +39,8 @@ export function childEnvironment(parts) {
     NEXTAUTH_URL: surroundings.NEXTAUTH_URL || baseUrl,
     NEXTAUTH_SECRET: surroundings.NEXTAUTH_SECRET || secrets.session,
   };
+  // Only for developers' builds beside a running server; ours is always the usual folder.
+  delete env.NEXT_DIST_DIR;
   if (mail === null) return env;
   return {
     ...env,

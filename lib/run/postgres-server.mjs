@@ -4,7 +4,7 @@ import { join } from "node:path";
 import { tailOf } from "./commands.mjs";
 import { freePort } from "./ports.mjs";
 import { asAccount } from "./postgres-account.mjs";
-import { isAlive, processFacts, signalProcess, waitUntil } from "./processes.mjs";
+import { isAlive, pause, processFacts, signalProcess, waitUntil } from "./processes.mjs";
 import { Problem } from "./words.mjs";
 
 /** The servers this process started or adopted, and whether it may still start one. */
@@ -20,7 +20,8 @@ export function parsePostmasterFile(text) {
   const lines = text.split("\n").map((line) => line.trim());
   const pid = Number(lines[0]);
   if (!Number.isInteger(pid) || pid <= 0) return null;
-  return { pid, dataDirectory: lines[1] ?? "", port: Number(lines[3] ?? 0), status: lines[7] ?? "" };
+  const memory = (lines[6] ?? "").split(/\s+/)[1] ?? "";
+  return { pid, dataDirectory: lines[1] ?? "", port: Number(lines[3] ?? 0), memory, status: lines[7] ?? "" };
 }
 
 function readPostmaster(cluster) {
@@ -39,17 +40,32 @@ function samePlace(one, other) {
   }
 }
 
+/** Whether some process still uses a shared memory segment: backends may outlive a killed server for a moment. */
+function memoryInUse(id) {
+  try {
+    const rows = readFileSync("/proc/sysvipc/shm", "utf8").split("\n").slice(1);
+    return rows
+      .map((row) => row.trim().split(/\s+/))
+      .some((cells) => cells[1] === id && Number(cells[6]) > 0);
+  } catch {
+    return true;
+  }
+}
+
 /**
- * A server that already runs on this cluster, or null. A file left by a dead server, or copied here together with the
- * folder of a living one, is removed.
+ * A server that already runs on this cluster, or null. PostgreSQL itself knows what to do with the file of a dead
+ * server. Two cases it can't tell are cleared here: a file copied together with the folder of another living server,
+ * and one whose number a stranger now has.
  * @param {string} cluster
+ * @returns {Promise<{ pid: number, port: number } | null>}
  */
-async function findRunning(cluster) {
+export async function findRunning(cluster) {
   const written = readPostmaster(cluster);
-  if (written === null) return null;
+  if (written === null || !isAlive(written.pid)) return null;
   const { pid } = written;
-  const alive = isAlive(pid) && processFacts(pid)?.name === "postgres";
-  if (!alive || !samePlace(written.dataDirectory, cluster)) {
+  const copied = !samePlace(written.dataDirectory, cluster);
+  const stranger = processFacts(pid)?.name !== "postgres" && !memoryInUse(written.memory);
+  if (copied || stranger) {
     rmSync(join(cluster, "postmaster.pid"), { force: true });
     return null;
   }
@@ -118,8 +134,10 @@ export async function ensureServer(where) {
     return { ...running, adopted: true };
   }
   let failure = "";
-  // A port that was free a moment ago may be taken by now: try again on another.
-  for (const wish of [where.port, undefined, undefined]) {
+  // After a server was killed, its backends may take a moment to notice and go; and a port that was free a moment ago
+  // may be taken by now.
+  for (const wish of [where.port, where.port, where.port, undefined]) {
+    if (failure !== "") await pause(700);
     const answer = await launchOnce({ ...where, port: await freePort(wish) });
     if ("pid" in answer) return { ...answer, adopted: false };
     failure = answer.failure;

@@ -14,7 +14,7 @@ import { withLock } from "./lock.mjs";
 import { asAccount, chooseHome, ensureHome, serverAccount } from "./postgres-account.mjs";
 import { ensurePostgresPrograms } from "./postgres-programs.mjs";
 import { ensureRolesAndDatabase, openPsql } from "./postgres-roles.mjs";
-import { ensureServer, stopServer } from "./postgres-server.mjs";
+import { ensureServer, findRunning, stopServer } from "./postgres-server.mjs";
 import { Problem } from "./words.mjs";
 
 function newRecord() {
@@ -31,7 +31,7 @@ function majorOfCluster(cluster) {
 }
 
 /** Makes a cluster beside its place and moves it there when it is whole, so that half a one is never taken for ours. */
-async function makeCluster({ programs, account, home, cluster, record }) {
+async function makeCluster({ programs, account, home, cluster, record, remember }) {
   const draft = `${cluster}.making`;
   const passwordFile = join(home, "first-password");
   rmSync(draft, { recursive: true, force: true });
@@ -43,9 +43,9 @@ async function makeCluster({ programs, account, home, cluster, record }) {
   rmSync(passwordFile, { force: true });
   if (made.code !== 0)
     throw new Problem(`The database cluster could not be made:\n${tailOf(made.err || made.out)}`);
-  const identifier = await systemIdentifier({ programs, account, home, cluster: draft });
+  // Written down first: after a crash in between, a cluster in its place is always one that we know.
+  remember(await systemIdentifier({ programs, account, home, cluster: draft }));
   renameSync(draft, cluster);
-  return identifier;
 }
 
 async function systemIdentifier({ programs, account, home, cluster }) {
@@ -89,8 +89,11 @@ async function bringUp({ dataDir, folder }) {
       );
     }
   } else {
-    record.systemIdentifier = await makeCluster(where);
-    save();
+    const remember = (identifier) => {
+      record.systemIdentifier = identifier;
+      save();
+    };
+    await makeCluster({ ...where, remember });
   }
   const name = `dwellbook-${record.instance}`;
   const server = await ensureServer({ ...where, name, port: record.port });
@@ -125,4 +128,22 @@ export async function ensureCluster({ dataDir, folder = "postgres" }) {
     psql,
     stop: (limitMs) => stopServer(server.pid, limitMs),
   };
+}
+
+/**
+ * Stops a cluster of a data folder and removes it for good.
+ * @param {{ dataDir: string, folder?: string, onlyOutside?: boolean }} which onlyOutside leaves one that lies in the
+ *   data folder itself, where it is found again
+ */
+export async function discardCluster({ dataDir, folder = "postgres", onlyOutside = false }) {
+  const recordPath = join(dataDir, `${folder}.json`);
+  const record = readJson(recordPath);
+  if (record === null) return;
+  const account = await serverAccount();
+  const home = await chooseHome({ account, dataDir, folder, instance: record.instance });
+  if (onlyOutside && home === join(dataDir, folder)) return;
+  const running = await findRunning(join(home, "cluster"));
+  if (running) await stopServer(running.pid);
+  rmSync(home, { recursive: true, force: true });
+  rmSync(recordPath, { force: true });
 }

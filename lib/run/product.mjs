@@ -1,6 +1,6 @@
 import { accessSync, constants } from "node:fs";
 import { join } from "node:path";
-import { readAccessTable } from "./access.mjs";
+import { protectAccess } from "./access.mjs";
 import { ensureBuild } from "./build.mjs";
 import { endCommands } from "./commands.mjs";
 import { hasNoPeople, migrate, seedDemo } from "./data-steps.mjs";
@@ -14,6 +14,7 @@ import { chooseWebPort, readPort } from "./ports.mjs";
 import { ensureCluster } from "./postgres.mjs";
 import { endServers } from "./postgres-server.mjs";
 import { isAlive } from "./processes.mjs";
+import { productParts, readyWords } from "./product-parts.mjs";
 import { keptPorts, keptSecrets } from "./secrets.mjs";
 import { createSupervisor } from "./supervisor.mjs";
 import { Problem, say, tellFailure } from "./words.mjs";
@@ -25,14 +26,15 @@ const house = { lock: null, supervisor: null, cluster: null, children: [], addre
 async function stop(code, reason) {
   if (house.stopping) return;
   house.stopping = true;
-  say(reason);
+  const said = house.lock ? say : () => {};
+  said(reason);
   house.supervisor?.hold();
   await endCommands(500);
   await Promise.all([house.supervisor?.end("web", 1_300), house.supervisor?.end("worker", 1_300)]);
   await house.supervisor?.end("mail", 300);
   await endServers(1_000);
   house.lock?.release();
-  say("Everything has ended.");
+  said("Everything has ended.");
   process.exit(code);
 }
 
@@ -83,6 +85,7 @@ async function fillDatabase(env, outside) {
   if (outside && env.DWELLBOOK_DEMO !== "1" && !(await hasNoPeople(env.DATABASE_URL))) return;
   say("Preparing the demo (all of it invented) …");
   await seedDemo(env);
+  protectAccess(env.DWELLBOOK_DATA_DIR);
 }
 
 /** PostgreSQL is watched too; on the same port it comes back, on another one the others could not find it. */
@@ -100,36 +103,6 @@ function watchCluster(dataDir) {
   setInterval(() => look().catch(fail), 500).unref();
 }
 
-function startParts(env, port, mail) {
-  const node = process.execPath;
-  const { supervisor } = house;
-  if (mail) {
-    const mailEnv = { ...env, MAIL_SMTP_PORT: String(mail.smtp), MAIL_PAGE_PORT: String(mail.mailPage) };
-    supervisor.keep({
-      name: "mail",
-      command: node,
-      args: [join(treeDir, "lib/run/mail-fake/main.mjs")],
-      env: mailEnv,
-    });
-  }
-  const worker = ["--import", "tsx", join(treeDir, "lib/jobs/worker-main.ts")];
-  for (let at = 1; at <= workerCount(env.DWELLBOOK_WORKERS); at += 1) {
-    supervisor.keep({ name: `worker ${at}`, command: node, args: worker, env });
-  }
-  const next = join(treeDir, "node_modules/next/dist/bin/next");
-  const args = [next, "start", "-H", "127.0.0.1", "-p", String(port)];
-  supervisor.keep({ name: "web server", command: node, args, env });
-}
-
-function announce(env, dataDir, mail) {
-  const lines = ["", `Dwellbook is ready: ${house.address}`];
-  if (mail) lines.push(`Its mail, which stays on this machine: ${env.DWELLBOOK_MAIL_PAGE_URL}`);
-  const table = readAccessTable(dataDir);
-  if (table !== "") lines.push("", "Demo sign-ins:", table);
-  lines.push("", `Logs are in ${join(dataDir, "logs")}. Ctrl-C ends all of it.`, "");
-  process.stdout.write(`${lines.join("\n")}\n`);
-}
-
 async function start() {
   const dataDir = dataDirOf();
   const asked = readPort(process.env.PORT);
@@ -145,6 +118,8 @@ async function start() {
   const env = childEnvironment({ surroundings: process.env, dataDir, port, ...urls, secrets, mail });
   await fillDatabase(env, outside);
   await ensureBuild(env);
+  // The build may have taken a minute, in which another program can have come.
+  await chooseWebPort(port);
   await startAndWait({ env, dataDir, port, mail });
 }
 
@@ -160,7 +135,7 @@ async function startAndWait({ env, dataDir, port, mail }) {
   };
   house.supervisor = createSupervisor({ logDir, onChange });
   if (house.cluster) watchCluster(dataDir);
-  startParts(env, port, mail);
+  for (const part of productParts(env, mail)) house.supervisor.keep({ command: process.execPath, ...part });
   const health = await waitForHealth(house.address, 120_000, () => house.stopping);
   if (house.stopping) return;
   if (!health.ok) {
@@ -169,7 +144,8 @@ async function startAndWait({ env, dataDir, port, mail }) {
       `Dwellbook did not get well within two minutes: ${health.words}.\nThe web server's last words:\n${words}`,
     );
   }
-  announce(env, dataDir, mail);
+  const mailPage = mail ? env.DWELLBOOK_MAIL_PAGE_URL : undefined;
+  process.stdout.write(`${readyWords({ address: house.address, mailPage, dataDir })}\n`);
 }
 
 function fail(error) {
