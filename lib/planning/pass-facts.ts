@@ -108,7 +108,6 @@ export interface AnswerFacts {
 /** The engagement that is being judged: whom it has asked, and what they said. */
 export interface OwnFacts {
   readonly engagementId: string;
-  readonly number: number;
   readonly requestedOf: ReadonlySet<string>;
   readonly answers: readonly AnswerFacts[];
 }

@@ -2,7 +2,7 @@ import type { SiteFrame } from "@/lib/physics/frames/earth";
 import type { Orbit } from "@/lib/physics/orbit/propagate";
 import { chooseDwell, type DwellLimits } from "./choose-dwell";
 import type { Closure } from "./closure";
-import { effectOfDwell } from "./effect";
+import { type Effect, effectOnTrack } from "./effect";
 import type { Aim, FragmentBody, PulsedLaser } from "./laser";
 import { openingsOf } from "./openings";
 import type { PassGeometry, StoredGeometry } from "./pass-geometry";
@@ -28,69 +28,77 @@ const STRIP_POINTS = 32;
 /** Seconds between two points of the worth curve the dwell is chosen on. */
 const PROFILE_STEP_S = 2;
 
+/** Of the time to melting only this share is used: the worth curve samples the heat coarsely. */
+const MELT_SHARE = 0.95;
+
 /**
  * Works out the strip and the best dwell of a pass. Pure: services that have a database use
  * `replanPasses` (lib/services/replan-passes.ts), which gathers the arguments and stores the result.
  */
 export function planPass(args: PlanArgs): StoredPlan {
-  const { orbit, frame, pass, laser, body, aim } = args;
-  const profiled = buildProfile({
-    orbit,
-    frame,
-    laser,
-    body,
-    fromMs: pass.riseMs,
-    toMs: pass.setMs,
-    stepS: PROFILE_STEP_S,
-    aim,
-  });
+  const { orbit, frame, pass, laser, body, aim, limits } = args;
   const base = {
     elementSetId: pass.elementSetId,
     laserSettingVersion: args.laserVersion,
-    inputs: planInputs(args.laserVersion, body, args.limits, aim),
+    inputs: planInputs(args.laserVersion, body, limits, aim),
     geometry: storedGeometry(pass),
   };
-  if (!profiled.ok) {
-    const strip = { elevationDeg: [], worthPerS: [] };
-    return { ...base, aim, aimUnit: "", strip, dwell: null, refusal: profiled.reason };
-  }
+  const span = { fromMs: pass.riseMs, toMs: pass.setMs };
+  const profiled = buildProfile({ orbit, frame, laser, body, ...span, stepS: PROFILE_STEP_S, aim });
+  if (!profiled.ok) return { ...base, ...nothing(aim), refusal: profiled.reason };
   const { profile } = profiled;
+  const planned = { ...base, aim: profile.aim, aimUnit: profile.aimUnit, strip: stripOf(profile) };
+  const meltS = profile.meltOnsetS === null ? null : profile.meltOnsetS * MELT_SHARE;
+  if (meltS !== null && meltS < limits.minDwellS) {
+    return { ...planned, dwell: null, refusal: meltRefusal(meltS, limits) };
+  }
   const chosen = chooseDwell({
     profile,
     riseMs: pass.riseMs,
     openings: openingsOf(pass, args.closures),
-    limits: args.limits,
+    limits: { ...limits, maxHeatingS: least(limits.maxHeatingS, meltS) },
   });
-  const dwell = chosen ? plannedDwell(args, chosen) : null;
-  return {
-    ...base,
-    aim: profile.aim,
-    aimUnit: profile.aimUnit,
-    strip: stripOf(profile),
-    dwell,
-    refusal: null,
-  };
+  return { ...planned, dwell: chosen ? plannedDwell(profile, chosen) : null, refusal: null };
+}
+
+function nothing(aim: Aim): Pick<StoredPlan, "aim" | "aimUnit" | "strip" | "dwell"> {
+  return { aim, aimUnit: "", strip: { elevationDeg: [], worthPerS: [] }, dwell: null };
+}
+
+function meltRefusal(meltS: number, limits: DwellLimits): string {
+  return `The fragment may reach its melting point after ${meltS.toFixed(1)} s of lasing, and the shortest dwell is ${limits.minDwellS} s.`;
+}
+
+function least(a: number | null, b: number | null): number | null {
+  if (a === null) return b;
+  return b === null ? a : Math.min(a, b);
 }
 
 /** The chosen stretch with what it does to the orbit; null when the effect can't be worked out. */
-export function plannedDwell(
-  args: Pick<PlanArgs, "orbit" | "frame" | "laser" | "body">,
+function plannedDwell(
+  profile: Profile,
   chosen: { fromMs: number; toMs: number; gain: number },
 ): PlannedDwell | null {
-  const { orbit, frame, laser, body } = args;
-  const worked = effectOfDwell({ orbit, frame, laser, body, fromMs: chosen.fromMs, toMs: chosen.toMs });
-  if (!worked.ok) return null;
-  const { effect } = worked;
+  const { laser, body } = profile;
+  const worked = effectOnTrack(profile.track, { laser, body, fromMs: chosen.fromMs, toMs: chosen.toMs });
+  return worked.ok ? { ...chosen, ...dropsOf(worked.effect) } : null;
+}
+
+/** How far perigee and semi-major axis come down, metres, with the smallest and largest drop of the band. */
+export function dropsOf(
+  effect: Pick<
+    Effect,
+    "perigeeBeforeKm" | "perigeeAfterKm" | "semiMajorAxisBeforeKm" | "semiMajorAxisAfterKm"
+  >,
+): Pick<PlannedDwell, "perigeeDropM" | "semiMajorAxisDropM" | "perigeeDropBandM" | "semiMajorAxisDropBandM"> {
   const perigeeM = (afterKm: number) => rounded((effect.perigeeBeforeKm - afterKm) * 1000, 3);
   const axisM = (afterKm: number) => rounded((effect.semiMajorAxisBeforeKm - afterKm) * 1000, 3);
+  const { perigeeAfterKm, semiMajorAxisAfterKm } = effect;
   return {
-    fromMs: chosen.fromMs,
-    toMs: chosen.toMs,
-    perigeeDropM: perigeeM(effect.perigeeAfterKm.p50),
-    semiMajorAxisDropM: axisM(effect.semiMajorAxisAfterKm.p50),
-    perigeeDropBandM: [perigeeM(effect.perigeeAfterKm.p90), perigeeM(effect.perigeeAfterKm.p10)],
-    semiMajorAxisDropBandM: [axisM(effect.semiMajorAxisAfterKm.p90), axisM(effect.semiMajorAxisAfterKm.p10)],
-    gain: chosen.gain,
+    perigeeDropM: perigeeM(perigeeAfterKm.p50),
+    semiMajorAxisDropM: axisM(semiMajorAxisAfterKm.p50),
+    perigeeDropBandM: [perigeeM(perigeeAfterKm.p90), perigeeM(perigeeAfterKm.p10)],
+    semiMajorAxisDropBandM: [axisM(semiMajorAxisAfterKm.p90), axisM(semiMajorAxisAfterKm.p10)],
   };
 }
 
