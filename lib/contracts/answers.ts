@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { OUTCOMES } from "./common";
+import { type EngagementState, OUTCOMES } from "./common";
 
 /** An authority's answer; the words an outcome needs are asked for by name. */
 export const answerInput = z
@@ -19,3 +19,30 @@ export const answerInput = z
     }
   });
 export type AnswerInput = z.infer<typeof answerInput>;
+
+/** What the page behind an answer link shows; nothing of it needs a sign-in. */
+export interface AnswerPageBody {
+  readonly engagementNumber: number;
+  readonly engagementState: EngagementState;
+  readonly kind: "request" | "revised request" | "cancellation" | "completion";
+  readonly authorityName: string;
+  readonly authorityTimeZone: string;
+  readonly stationName: string;
+  readonly fragmentName: string;
+  readonly dwellFrom: string;
+  readonly dwellTo: string;
+  readonly answerBy: string | null;
+  readonly subject: string;
+  /** The notice as it was sent. */
+  readonly text: string;
+  readonly canAnswer: boolean;
+  /** Why the form takes no answer, in a sentence; null when it does. */
+  readonly closedBecause: string | null;
+  readonly answer: {
+    readonly outcome: string;
+    readonly conditions: string | null;
+    readonly reasons: string | null;
+    readonly answeredBy: string;
+    readonly answeredAt: string;
+  } | null;
+}

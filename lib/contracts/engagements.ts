@@ -38,7 +38,8 @@ export const fireInput = z.strictObject({
   outcome: z.enum(["fired", "in part", "not fired"]),
   openedAt: instantText.nullish(),
   closedAt: instantText.nullish(),
-  pulses: z.number().int().min(0).max(100_000_000),
+  /** Needed unless nothing was fired. */
+  pulses: z.number().int().min(0).max(100_000_000).nullish(),
   interruptions: z
     .array(
       z.strictObject({ at: instantText, cause: past.max(200), secondsLost: z.number().min(0).max(86_400) }),
@@ -51,9 +52,24 @@ export const fireInput = z.strictObject({
 export const engagementQuery = z.strictObject({
   station: identifierText.optional(),
   fragment: identifierText.optional(),
+  /** One state, or several with commas between them. */
   state: z.string().optional(),
   from: instantText.optional(),
   to: instantText.optional(),
+});
+
+export const noticeQuery = z.strictObject({ engagement: identifierText.optional() });
+
+/** The ledger is read newest first; `before` takes the last id that was seen. */
+export const ledgerQuery = z.strictObject({
+  subjectKind: z.string().max(60).optional(),
+  subjectId: z.string().max(100).optional(),
+  actor: z.string().max(120).optional(),
+  text: z.string().max(200).optional(),
+  from: instantText.optional(),
+  to: instantText.optional(),
+  before: z.coerce.number().int().positive().optional(),
+  limit: z.coerce.number().int().min(1).max(500).default(100),
 });
 
 /** An engagement in a list. */
@@ -70,7 +86,10 @@ export interface EngagementBody extends SpanBody {
   readonly holdFrom: string;
   readonly holdUntil: string;
   readonly planner: string;
+  readonly plannerId: string;
   readonly endReason: string | null;
+  /** Confirmed, and its firing record is still missing long after the dwell. */
+  readonly overdue: boolean;
   readonly perigeeDropM: number;
   readonly semiMajorAxisDropM: number;
   readonly createdAt: string;
