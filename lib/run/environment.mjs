@@ -17,10 +17,10 @@ export function workerCount(text, cores = availableParallelism()) {
 
 /**
  * The environment that every part of the product is started with. What the surroundings set stands.
- * @param {{ surroundings: NodeJS.ProcessEnv, dataDir: string, port: number, databaseUrl: string, ownerUrl: string,
+ * @param {{ surroundings: Record<string, string | undefined>, dataDir: string, port: number, databaseUrl: string, ownerUrl: string,
  *   secrets: { session: string, link: string }, mail: { smtp: number, mailPage: number } | null }} parts
  *   mail is null when SMTP_URL replaces the mail fake
- * @returns {NodeJS.ProcessEnv}
+ * @returns {Record<string, string | undefined>}
  */
 export function childEnvironment(parts) {
   const { surroundings, dataDir, port, databaseUrl, ownerUrl, secrets, mail } = parts;

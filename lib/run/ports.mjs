@@ -19,7 +19,7 @@ export function tryPort(port) {
 
 /**
  * A free loopback port, the preferred one if it is still free.
- * @param {number | undefined} preferred
+ * @param {number} [preferred]
  * @returns {Promise<number>}
  */
 export async function freePort(preferred) {
