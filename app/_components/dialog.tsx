@@ -38,7 +38,7 @@ export function Dialog({ open, onClose, title, children }: DialogProps) {
             <h2 id={titleId} className="text-xl font-bold">
               {title}
             </h2>
-            <button type="button" className="link min-h-6" onClick={() => box.current?.close()}>
+            <button type="button" className="act" onClick={() => box.current?.close()}>
               Close
             </button>
           </div>

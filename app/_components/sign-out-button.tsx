@@ -18,7 +18,7 @@ export function SignOutButton() {
     }
   };
   return (
-    <button type="button" className="link min-h-6" disabled={busy} onClick={leave}>
+    <button type="button" className="act" disabled={busy} onClick={leave}>
       Sign out
     </button>
   );

@@ -1,21 +1,22 @@
 "use client";
 
-import { useState } from "react";
+import { useId, useSyncExternalStore } from "react";
+import { chooseTheme, chosenTheme, onTheme } from "@/app/_client/theme-store";
 import { THEMES, type Theme } from "./theme";
+
+const LABELS: Record<Theme, string> = { system: "As system", light: "Light", dark: "Dark", red: "Red" };
 
 /**
  * Light, dark, or red for eyes used to the dark. The choice is kept in a cookie,
  * so the server draws the next page in it from the start.
  */
 export function ThemeSwitch({ initial }: { readonly initial: Theme }) {
-  const [theme, setTheme] = useState(initial);
-  const choose = (next: Theme) => {
-    setTheme(next);
-    if (next === "system") delete document.documentElement.dataset.theme;
-    else document.documentElement.dataset.theme = next;
-    // biome-ignore lint/suspicious/noDocumentCookie: the Cookie Store API is not in every browser yet
-    document.cookie = `dwellbook.theme=${next}; path=/; max-age=31536000; samesite=lax`;
-  };
+  const group = useId();
+  const theme = useSyncExternalStore(
+    onTheme,
+    () => chosenTheme() ?? initial,
+    () => initial,
+  );
   return (
     <fieldset className="flex items-center text-[0.8125rem]">
       <legend className="sr-only">Theme</legend>
@@ -26,13 +27,13 @@ export function ThemeSwitch({ initial }: { readonly initial: Theme }) {
         >
           <input
             type="radio"
-            name="theme"
+            name={group}
             value={name}
             checked={theme === name}
-            onChange={() => choose(name)}
+            onChange={() => chooseTheme(name)}
             className="sr-only"
           />
-          {name === "system" ? "As system" : `${name[0]?.toUpperCase()}${name.slice(1)}`}
+          {LABELS[name]}
         </label>
       ))}
     </fieldset>

@@ -40,7 +40,7 @@ function toast(a: Announcement, drop: (id: number) => void) {
       className={`flex items-start gap-4 rounded border bg-sheet px-4 py-2.5 ${a.kind === "problem" ? "border-l-4 border-dwell" : "border-ink"}`}
     >
       <p>{a.message}</p>
-      <button type="button" className="link min-h-6 shrink-0 text-sm" onClick={() => drop(a.id)}>
+      <button type="button" className="act shrink-0 text-sm" onClick={() => drop(a.id)}>
         Close
       </button>
     </div>

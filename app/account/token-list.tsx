@@ -91,7 +91,7 @@ function Tokens({ tokens, onRevoke }: TokensProps) {
         {
           head: "",
           cell: (token) => (
-            <button type="button" className="link min-h-6" onClick={() => onRevoke(token)}>
+            <button type="button" className="act" onClick={() => onRevoke(token)}>
               Revoke<span className="sr-only"> {token.label}</span>
             </button>
           ),

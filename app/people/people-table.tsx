@@ -75,23 +75,19 @@ function actionsColumn(viewerId: string, ask: (asked: Asked) => void): Column<Pe
     head: "",
     cell: (person) => (
       <div className="flex flex-wrap gap-x-5 gap-y-1">
-        <button type="button" className="link min-h-6" onClick={() => ask({ what: "change", person })}>
+        <button type="button" className="act" onClick={() => ask({ what: "change", person })}>
           Change<span className="sr-only"> {person.name}</span>
         </button>
         {person.id === viewerId ? (
-          <Link className="link min-h-6" href="/account">
+          <Link className="act" href="/account">
             Your account
           </Link>
         ) : (
-          <button
-            type="button"
-            className="link min-h-6"
-            onClick={() => ask({ what: "end sessions", person })}
-          >
+          <button type="button" className="act" onClick={() => ask({ what: "end sessions", person })}>
             End sessions<span className="sr-only"> of {person.name}</span>
           </button>
         )}
-        <Link className="link min-h-6" href={`/ledger?subject=person&subjectId=${person.id}`}>
+        <Link className="act" href={`/ledger?subject=person&subjectId=${person.id}`}>
           Ledger<span className="sr-only"> of {person.name}</span>
         </Link>
       </div>
