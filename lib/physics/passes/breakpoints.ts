@@ -45,17 +45,23 @@ export function cutStretch(
   const edges = stretch.edgesMs;
   sightEdge(sight, stretch, 0, here);
   const points: Breakpoint[] = [edgePoint(stretch.first, here)];
-  for (let i = 1; i < edges.length; i++) {
+  for (let i = 1; i <= stretch.parts; i++) {
     const fromMs = edges[i - 1] as number;
     const toMs = edges[i] as number;
     sightEdge(sight, stretch, i, next);
     if (here.receding < 0 && next.receding >= 0) {
       nearPoints.push(nearPoint(sight, stretch, fromMs, here.receding, toMs, next.receding));
     }
-    if (here.climb > 0 !== next.climb > 0 && matters(sight, here, next, (toMs - fromMs) / 1000)) {
-      const point = extremum(orbit, sight, stretch, fromMs, here.climb, toMs, next.climb);
-      if (!point) return null;
-      points.push(point);
+    const turns = here.climb > 0 !== next.climb > 0 && matters(sight, here, next, (toMs - fromMs) / 1000);
+    if (turns || here.overKm > 0 !== next.overKm > 0) {
+      // Points around anything of interest keep the brackets of the polishing short.
+      points.push({ atMs: fromMs, overKm: here.overKm, kind: "edge", node: null });
+      if (turns) {
+        const point = extremum(orbit, sight, stretch, fromMs, here.climb, toMs, next.climb);
+        if (!point) return null;
+        points.push(point);
+      }
+      points.push({ atMs: toMs, overKm: next.overKm, kind: "edge", node: null });
     }
     [here, next] = [next, here];
   }

@@ -3,10 +3,10 @@ import type { Orbit } from "../orbit/propagate";
 import { blankSighting, climbRate, type Sight, sightNode } from "./sight";
 
 /**
- * Newton steps shorter than this are taken by the node's own acceleration instead of another SGP4 call.
- * The curvature left out moves the result by less than a millisecond, even for a pass that lasts a second.
+ * Newton steps shorter than this are taken by the node's own acceleration instead of another SGP4 call. What
+ * the curvature then leaves is the step squared over the length of the pass: 2.5 ms for a pass of a second.
  */
-const LAST_STEP_MS = 20;
+const LAST_STEP_MS = 50;
 
 /** After so many steps the bracket is halved instead, so that the search always ends. */
 const MOST_NEWTON_STEPS = 8;

@@ -1,61 +1,96 @@
 import type { EarthFixedNode } from "../orbit/earth-fixed";
-import { evaluate, type HermiteSegment, hermiteSegment } from "../orbit/hermite";
+import { blankSegment, evaluate, fitSegment, type HermiteSegment } from "../orbit/hermite";
 import { blankSighting, type Sight, type Sighting, sightAt } from "./sight";
 
-/** Parts that a segment is looked at in; within one part the elevation has at most one extremum. */
-const PARTS = 4;
+/**
+ * A stretch is looked at in parts of a minute, in eight of them when it is longer (it is then at most 0.3
+ * radians of its orbit): within one part the elevation has at most one extremum.
+ */
+const PART_MS = 60_000;
+const MOST_PARTS = 8;
 
-/** One stretch between two SGP4 nodes, with positions in between, shared by all stations. */
+/**
+ * One stretch between two SGP4 nodes, with positions in between, shared by all stations. A search keeps one
+ * and refills it.
+ */
 export interface Stretch {
   readonly segment: HermiteSegment;
-  readonly first: EarthFixedNode;
-  readonly last: EarthFixedNode;
+  first: EarthFixedNode;
+  last: EarthFixedNode;
+  parts: number;
   /** Times of the parts' edges, and six numbers (km, km/s) for each. */
-  readonly edgesMs: readonly number[];
+  readonly edgesMs: Float64Array;
   readonly states: Float64Array;
+}
+
+/** A stretch without length, to be refilled. */
+export function blankStretch(node: EarthFixedNode): Stretch {
+  return {
+    segment: blankSegment(),
+    first: node,
+    last: node,
+    parts: 0,
+    edgesMs: new Float64Array(MOST_PARTS + 1),
+    states: new Float64Array(6 * (MOST_PARTS + 1)),
+  };
+}
+
+/** Prepares a stretch between two nodes. */
+export function fillStretch(stretch: Stretch, first: EarthFixedNode, last: EarthFixedNode): void {
+  const { segment, edgesMs, states } = stretch;
+  stretch.first = first;
+  stretch.last = last;
+  const parts = Math.min(MOST_PARTS, Math.ceil((last.atMs - first.atMs) / PART_MS));
+  stretch.parts = parts;
+  fitSegment(first, last, segment);
+  edgesMs[0] = first.atMs;
+  edgesMs[parts] = last.atMs;
+  // The end points are SGP4's own, so that neighbouring stretches agree to the last bit.
+  putNode(states, 0, first);
+  putNode(states, 6 * parts, last);
+  for (let i = 1; i < parts; i++) {
+    const atMs = first.atMs + ((last.atMs - first.atMs) * i) / parts;
+    edgesMs[i] = atMs;
+    evaluate(segment, atMs, states, 6 * i);
+  }
+}
+
+function putNode(states: Float64Array, at: number, node: EarthFixedNode): void {
+  states[at] = node.x;
+  states[at + 1] = node.y;
+  states[at + 2] = node.z;
+  states[at + 3] = node.vx;
+  states[at + 4] = node.vy;
+  states[at + 5] = node.vz;
 }
 
 const point = new Float64Array(6);
 
-/** Prepares a stretch between two nodes. */
-export function makeStretch(first: EarthFixedNode, last: EarthFixedNode): Stretch {
-  const segment = hermiteSegment(first, last);
-  const edgesMs: number[] = [];
-  const states = new Float64Array(6 * (PARTS + 1));
-  for (let i = 0; i <= PARTS; i++) {
-    const atMs = i === PARTS ? last.atMs : first.atMs + ((last.atMs - first.atMs) * i) / PARTS;
-    edgesMs.push(atMs);
-    evaluate(segment, atMs, point);
-    states.set(point, 6 * i);
-  }
-  // The end points are SGP4's own, so that neighbouring stretches agree to the last bit.
-  states.set([first.x, first.y, first.z, first.vx, first.vy, first.vz], 0);
-  states.set([last.x, last.y, last.z, last.vx, last.vy, last.vz], 6 * PARTS);
-  return { segment, first, last, edgesMs, states };
-}
-
 /** Sights the object at one of the edges of the parts. */
 export function sightEdge(sight: Sight, stretch: Stretch, edge: number, out: Sighting): void {
-  const s = stretch.states;
-  const j = 6 * edge;
-  sightAt(
-    sight,
-    s[j] as number,
-    s[j + 1] as number,
-    s[j + 2] as number,
-    s[j + 3] as number,
-    s[j + 4] as number,
-    s[j + 5] as number,
-    out,
-  );
+  sightNumbers(sight, stretch.states, 6 * edge, out);
 }
 
 /** Sights the object at any time of the stretch, on the polynomial. */
 export function sightBetween(sight: Sight, stretch: Stretch, atMs: number, out: Sighting): void {
-  evaluate(stretch.segment, atMs, point);
-  const [x, y, z, vx, vy, vz] = point as unknown as readonly [number, number, number, number, number, number];
-  sightAt(sight, x, y, z, vx, vy, vz, out);
+  evaluate(stretch.segment, atMs, point, 0);
+  sightNumbers(sight, point, 0, out);
 }
+
+function sightNumbers(sight: Sight, s: Float64Array, at: number, out: Sighting): void {
+  sightAt(
+    sight,
+    s[at] as number,
+    s[at + 1] as number,
+    s[at + 2] as number,
+    s[at + 3] as number,
+    s[at + 4] as number,
+    s[at + 5] as number,
+    out,
+  );
+}
+
+const CLOSE_MS = 100;
 
 const probe = blankSighting();
 
@@ -79,7 +114,7 @@ export function rootBetween(
     root = (a * fb - b * fa) / (fb - fa);
     sightBetween(sight, stretch, root, probe);
     const value = probe[quantity];
-    if (value === 0 || Math.abs(root - previous) < 50) return root;
+    if (value === 0 || Math.abs(root - previous) < CLOSE_MS) return root;
     if (value > 0 === fb > 0) {
       [b, fb] = [root, value];
       fa /= 2;

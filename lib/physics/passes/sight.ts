@@ -1,10 +1,14 @@
 import { makeSiteFrame, type SiteFrame } from "../frames/earth";
 import type { EarthFixedNode } from "../orbit/earth-fixed";
 import type { Site } from "../orbit/elements";
+import { norm, scale, type Vec3 } from "../vector";
 
 /** A station made ready for many sightings: numbers only, Earth-fixed, km. */
 export interface Sight {
   readonly frame: SiteFrame;
+  /** Distance from the Earth's centre, km, and direction from there. */
+  readonly radiusKm: number;
+  readonly direction: Vec3;
   readonly sinMin: number;
   readonly minElevationRad: number;
 }
@@ -26,7 +30,10 @@ export interface Sighting {
 
 /** Prepares a station; the elevation limit is geometric, in radians. */
 export function makeSight(site: Site, minElevationRad: number): Sight {
-  return { frame: makeSiteFrame(site), sinMin: Math.sin(minElevationRad), minElevationRad };
+  const frame = makeSiteFrame(site);
+  const radiusKm = norm(frame.positionKm);
+  const direction = scale(frame.positionKm, 1 / radiusKm);
+  return { frame, radiusKm, direction, sinMin: Math.sin(minElevationRad), minElevationRad };
 }
 
 /** An empty sighting to be filled again and again. */

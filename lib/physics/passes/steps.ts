@@ -1,0 +1,123 @@
+import { EARTH_MU_KM3_PER_S2, EARTH_RADIUS_KM, TWO_PI } from "../constants";
+import { type EarthFixedNode, earthFixedNode } from "../orbit/earth-fixed";
+import { blankSegment, evaluate, fitSegment } from "../orbit/hermite";
+import type { Orbit } from "../orbit/propagate";
+import { blankSighting, type Sight, sightNode } from "./sight";
+import { canSkip, nextWindow, planeAt, type Window } from "./skip-ahead";
+import type { Track } from "./track";
+
+/** Nodes of a low, nearly circular orbit lie this far apart at most (63 m off at worst, 6 m on average). */
+const STEP_MS = 480_000;
+
+/** Nodes of other orbits lie this angle apart at most, at the rate of a circular orbit at that distance. */
+const STEP_RAD = 0.3;
+
+/** ... and nearer together until the polynomial is within this angle of SGP4, seen from the ground. */
+const TOLERANCE_RAD = 2e-4;
+const SHORTEST_STEP_MS = 5_000;
+
+/** Where in a step the polynomial is compared: errors of the velocities cancel in the middle. */
+const PROBE_AT = 0.3;
+
+/** What a search for passes carries along. */
+export interface Search {
+  readonly orbit: Orbit;
+  readonly tracks: readonly Track[];
+  /** Where each station can next see the object; stretches outside are jumped over. */
+  readonly windows: Window[];
+  readonly skipping: boolean;
+  readonly toMs: number;
+}
+
+/** Readies a search for the time from `first` to `toMs`. */
+export function startSearch(
+  orbit: Orbit,
+  tracks: readonly Track[],
+  first: EarthFixedNode,
+  toMs: number,
+): Search {
+  const windows = tracks.map(() => ({ fromMs: first.atMs, toMs: first.atMs }));
+  const sights: Sight[] = tracks.map((track) => track.sight);
+  const { eccentricity } = orbit.elements;
+  return { orbit, tracks, windows, skipping: canSkip(sights, eccentricity, apogeeKm(orbit)), toMs };
+}
+
+/** When the next node is needed: after a step while a station may see the object, else at a window. */
+export function nextTime(search: Search, node: EarthFixedNode): number {
+  if (!search.skipping) return adaptedStep(search, node);
+  const { tracks, windows, toMs } = search;
+  let plane: ReturnType<typeof planeAt> | null = null;
+  let untilMs = Number.NEGATIVE_INFINITY;
+  let nearestMs = toMs;
+  for (const [i, track] of tracks.entries()) {
+    let window = windows[i] as Window;
+    if (window.toMs <= node.atMs && !track.open) {
+      plane ??= planeAt(node);
+      window = nextWindow(plane, track.sight);
+      windows[i] = window;
+    }
+    if (track.open) untilMs = Math.max(untilMs, window.toMs, node.atMs + STEP_MS / 4);
+    else if (window.fromMs <= node.atMs) untilMs = Math.max(untilMs, window.toMs);
+    else nearestMs = Math.min(nearestMs, window.fromMs);
+  }
+  if (untilMs <= node.atMs) return nearestMs;
+  const leftMs = Math.min(untilMs, toMs) - node.atMs;
+  return node.atMs + leftMs / Math.ceil(leftMs / STEP_MS);
+}
+
+const trial = blankSegment();
+const point = new Float64Array(6);
+
+/** The end of the longest step, up to the usual one, over which the polynomial is near enough to SGP4. */
+function adaptedStep(search: Search, node: EarthFixedNode): number {
+  const radius = Math.hypot(node.x, node.y, node.z);
+  const usualMs = 1000 * STEP_RAD * Math.sqrt(radius ** 3 / EARTH_MU_KM3_PER_S2);
+  let stepMs = Math.min(search.toMs - node.atMs, usualMs);
+  let end = earthFixedNode(search.orbit, node.atMs + stepMs);
+  while (stepMs > SHORTEST_STEP_MS) {
+    const probeMs = stepMs * PROBE_AT;
+    const probe = earthFixedNode(search.orbit, node.atMs + probeMs);
+    if (end && probe && isNear(node, end, probe)) break;
+    [stepMs, end] = [probeMs, probe];
+  }
+  return node.atMs + stepMs;
+}
+
+function isNear(first: EarthFixedNode, last: EarthFixedNode, probe: EarthFixedNode): boolean {
+  fitSegment(first, last, trial);
+  evaluate(trial, probe.atMs, point, 0);
+  const [x = 0, y = 0, z = 0] = point;
+  const offKm = Math.hypot(x - probe.x, y - probe.y, z - probe.z);
+  const nearestKm = Math.max(100, Math.hypot(probe.x, probe.y, probe.z) - EARTH_RADIUS_KM);
+  return offKm < TOLERANCE_RAD * nearestKm;
+}
+
+/** Whether a station must look at the stretch between two times. */
+export function isLookedAt(search: Search, i: number, fromMs: number, toMs: number): boolean {
+  const window = search.windows[i] as Window;
+  if (!search.skipping || search.tracks[i]?.open) return true;
+  return window.fromMs < toMs && window.toMs > fromMs;
+}
+
+/**
+ * A guard that should never act: when a jump ends with an object already above a station's limit, that
+ * station's window is widened back to the node before the jump, and the jump is not made.
+ */
+export function widenForLateLanding(search: Search, before: EarthFixedNode, landed: EarthFixedNode): boolean {
+  const seen = blankSighting();
+  let late = false;
+  for (const [i, track] of search.tracks.entries()) {
+    sightNode(track.sight, landed, seen);
+    if (seen.overKm <= 0 || landed.atMs <= before.atMs) continue;
+    search.windows[i] = { fromMs: before.atMs, toMs: landed.atMs + STEP_MS };
+    late = true;
+  }
+  return late;
+}
+
+/** Apogee radius from the mean elements, km, with room for what SGP4 adds to it. */
+function apogeeKm(orbit: Orbit): number {
+  const meanMotion = TWO_PI / orbit.periodS;
+  const semiMajorKm = Math.cbrt(EARTH_MU_KM3_PER_S2 / meanMotion ** 2);
+  return semiMajorKm * (1 + orbit.elements.eccentricity) + 50;
+}
