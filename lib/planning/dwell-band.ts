@@ -43,12 +43,12 @@ const THREE_POINTS: readonly (readonly [sigmas: number, weight: number])[] = [
   [Math.sqrt(3), 1 / 6],
 ];
 
-/** Where the effect is worked out over the strength of the push, and what lies between is interpolated. */
-const STRENGTH_SIGMAS = [-2.4, -1.6, -0.8, 0, 0.8, 1.6, 2.4] as const;
+/** Where the effect is worked out over the strength of the push; between lies their common polynomial. */
+const STRENGTH_SIGMAS = [-2.4, -1.2, 0, 1.2, 2.4] as const;
 
 /** Step and end of the fine division of the normal distribution of the strength, in sigmas. */
 const FINE_STEP = 0.05;
-const FINE_END = 3.2;
+const FINE_END = 2.8;
 
 interface Outcome {
   readonly axisKm: number;
@@ -59,7 +59,7 @@ interface Outcome {
  * Bands of the semi-major axis and the perigee after a dwell. Mass, area, coupling and pointing residual
  * are independent and lognormal about the stated values (pointing as a factor on the jitter; the
  * along-track error is no part of it, tracking removes it). Deterministic: three Gauss-Hermite points each
- * for area and pointing, seven points for the strength (coupling over mass) with straight lines between,
+ * for area and pointing, five points for the strength (coupling over mass) with a polynomial through them,
  * then the weighted percentiles of a fine division. Null where the orbit opens even at a moderate push.
  */
 export function bandsAfter(
@@ -75,46 +75,46 @@ export function bandsAfter(
     sigma(MATERIALS[body.material].couplingBand.value),
     sigma(knowledge.mass.value),
   );
-  const strengths = STRENGTH_SIGMAS.map((z) => Math.exp(strengthSigma * z));
   const all: (Outcome & { weight: number })[] = [];
   for (const [areaZ, areaWeight] of THREE_POINTS) {
     for (const [jitterZ, jitterWeight] of laser.jitterUrad > 0 ? THREE_POINTS : ([[0, 1]] as const)) {
       const area = Math.exp(sigma(knowledge.area.value) * areaZ);
       const jitter = Math.exp(sigma(knowledge.pointingResidual.value) * jitterZ);
       const outcomes: Outcome[] = [];
-      for (const strength of strengths) {
+      for (const z of STRENGTH_SIGMAS) {
+        const strength = Math.exp(strengthSigma * z);
         const nudge = nudgeOf(track, makeShots(laser, body, { strength, area, jitter }), fromMs, toMs);
         if (!nudge) return null;
         const { semiMajorAxisKm } = nudge.after;
         outcomes.push({ axisKm: semiMajorAxisKm, perigeeKm: meanPerigeeAltitudeKm(nudge.after) });
       }
-      spread(all, strengths, outcomes, strengthSigma, areaWeight * jitterWeight);
+      spread(all, outcomes, areaWeight * jitterWeight);
     }
   }
   return { axisKm: bandOf(all, "axisKm"), perigeeKm: bandOf(all, "perigeeKm") };
 }
 
-/** Adds the outcomes over the whole distribution of the strength, by straight lines between its points. */
-function spread(
-  all: (Outcome & { weight: number })[],
-  strengths: readonly number[],
-  outcomes: readonly Outcome[],
-  strengthSigma: number,
-  weight: number,
-): void {
+/** Adds the outcomes over the whole distribution of the strength, by the polynomial through its points. */
+function spread(all: (Outcome & { weight: number })[], outcomes: readonly Outcome[], weight: number): void {
   for (let z = -FINE_END; z <= FINE_END + FINE_STEP / 2; z += FINE_STEP) {
-    const strength = Math.exp(strengthSigma * z);
-    const above = strengths.findIndex((s) => s >= strength);
-    const i = above === -1 ? strengths.length - 1 : Math.max(1, above);
-    const [s0, s1, o0, o1] = [strengths[i - 1], strengths[i], outcomes[i - 1], outcomes[i]];
-    if (s0 === undefined || s1 === undefined || !o0 || !o1) continue;
-    const share = (strength - s0) / (s1 - s0);
-    all.push({
-      axisKm: o0.axisKm + share * (o1.axisKm - o0.axisKm),
-      perigeeKm: o0.perigeeKm + share * (o1.perigeeKm - o0.perigeeKm),
-      weight: weight * Math.exp(-z * z * 0.5),
-    });
+    let [axisKm, perigeeKm] = [0, 0];
+    for (const [i, outcome] of outcomes.entries()) {
+      const share = lagrange(i, z);
+      axisKm += share * outcome.axisKm;
+      perigeeKm += share * outcome.perigeeKm;
+    }
+    all.push({ axisKm, perigeeKm, weight: weight * Math.exp(-z * z * 0.5) });
   }
+}
+
+/** Lagrange's polynomial that is 1 at point i and 0 at the others. */
+function lagrange(i: number, z: number): number {
+  const here = STRENGTH_SIGMAS[i] ?? Number.NaN;
+  let product = 1;
+  for (const [j, other] of STRENGTH_SIGMAS.entries()) {
+    if (j !== i) product *= (z - other) / (here - other);
+  }
+  return product;
 }
 
 function bandOf(all: readonly (Outcome & { weight: number })[], of: keyof Outcome): Band {

@@ -33,11 +33,20 @@ export function linearGain(
   const energy = -WGS72_MU_KM3_PER_S2 / (2 * mean.semiMajorAxisKm);
   const gainOf = linearMeasure(profile, mean);
   return (fromS, toS) => {
-    const [a, b] = [4 * (fromS - window.fromS), 4 * (toS - window.fromS)];
-    const part = (i: number): number => (sums[b + i] ?? 0) - (sums[a + i] ?? 0);
-    const [x, y, z] = [start.x + part(1), start.y + part(2), start.z + part(3)];
-    return gainOf(-WGS72_MU_KM3_PER_S2 / (2 * (energy + part(0))), Math.sqrt(x * x + y * y + z * z));
+    const a = 4 * (fromS - window.fromS);
+    const b = 4 * (toS - window.fromS);
+    const x = start.x + between(sums, a + 1, b + 1);
+    const y = start.y + between(sums, a + 2, b + 2);
+    const z = start.z + between(sums, a + 3, b + 3);
+    return gainOf(
+      -WGS72_MU_KM3_PER_S2 / (2 * (energy + between(sums, a, b))),
+      Math.sqrt(x * x + y * y + z * z),
+    );
   };
+}
+
+function between(sums: Float64Array, from: number, to: number): number {
+  return (sums[to] ?? 0) - (sums[from] ?? 0);
 }
 
 /** Sums of energy (km²/s²) and of the eccentricity vector up to each second of the window, four a second. */
@@ -50,16 +59,17 @@ function runningSums(profile: Profile, window: Window): Float64Array {
     const { rangeKm, elevationRad } = elevationAndRange(point);
     const speed = shots.deltaVPerPulseMPerS(rangeKm, elevationRad) * shots.repetitionRateHz * 1e-3;
     const push = scale(subtract(r, point.siteKm), speed / rangeKm);
-    const [vk, rk, rv] = [dot(v, push), dot(r, push), dot(r, v)];
+    const energy = dot(v, push);
+    // Gauss's change of the eccentricity vector: [2 (v·k) r - (r·k) v - (r·v) k] / µ.
+    const turn = scale(
+      subtract(subtract(scale(r, 2 * energy), scale(v, dot(r, push))), scale(push, dot(r, v))),
+      1 / WGS72_MU_KM3_PER_S2,
+    );
     const at = 4 * (second - window.fromS);
-    const mu = WGS72_MU_KM3_PER_S2;
-    const add = (i: number, change: number): void => {
-      sums[at + 4 + i] = (sums[at + i] ?? 0) + change;
-    };
-    add(0, vk);
-    add(1, (2 * vk * r.x - rk * v.x - rv * push.x) / mu);
-    add(2, (2 * vk * r.y - rk * v.y - rv * push.y) / mu);
-    add(3, (2 * vk * r.z - rk * v.z - rv * push.z) / mu);
+    sums[at + 4] = (sums[at] ?? 0) + energy;
+    sums[at + 5] = (sums[at + 1] ?? 0) + turn.x;
+    sums[at + 6] = (sums[at + 2] ?? 0) + turn.y;
+    sums[at + 7] = (sums[at + 3] ?? 0) + turn.z;
   }
   return sums;
 }

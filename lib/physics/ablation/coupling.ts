@@ -52,7 +52,7 @@ export function couplingCurve(
   const law = (fluence: number): number =>
     fluence < optimum
       ? (peak * (fluence - threshold)) / (optimum - threshold)
-      : peak * (fluence / optimum) ** -0.25;
+      : peak * Math.sqrt(Math.sqrt(optimum / fluence));
   return {
     thresholdJPerM2: threshold,
     optimumJPerM2: optimum,

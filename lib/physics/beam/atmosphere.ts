@@ -28,5 +28,6 @@ export function transmission(
   elevationRad: number,
   pressurePa: number = STANDARD_PRESSURE_PA,
 ): number {
-  return zenithTransmission ** (airmass(elevationRad) * (pressurePa / STANDARD_PRESSURE_PA));
+  const depth = -Math.log(zenithTransmission) * (pressurePa / STANDARD_PRESSURE_PA);
+  return Math.exp(-depth * airmass(elevationRad));
 }

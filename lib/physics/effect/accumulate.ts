@@ -32,11 +32,14 @@ export function noDeviation(): Deviation {
 
 /**
  * Number of pulses between two times (s after the first pulse), the earlier included and the later not.
- * The tolerance keeps 10 s at 10 Hz at 100 pulses whatever the last digit of the product.
  */
 export function pulsesBetween(repetitionRateHz: number, fromS: number, toS: number): number {
-  const before = (s: number): number => Math.ceil(s * repetitionRateHz - 1e-6);
-  return before(toS) - before(fromS);
+  return pulsesBefore(repetitionRateHz, toS) - pulsesBefore(repetitionRateHz, fromS);
+}
+
+/** The tolerance keeps 10 s at 10 Hz at 100 pulses whatever the last digit of the product. */
+function pulsesBefore(repetitionRateHz: number, seconds: number): number {
+  return Math.ceil(seconds * repetitionRateHz - 1e-6);
 }
 
 /**
@@ -71,54 +74,57 @@ export function lase(
   }
 }
 
-/** One step: drift half-way, kick by gravity's difference and the pulses, drift on. */
+/**
+ * One step: drift half-way, kick by gravity's difference and the pulses, drift on. Plain numbers in here:
+ * the choice of a dwell takes a hundred thousand of these steps.
+ */
 function advance(d: Deviation, middle: TrackPoint, push: Push, stepS: number, pulses: number): void {
-  const { rKm: r, vKmPerS: v } = middle.state;
+  const r = middle.state.rKm;
   const half = stepS / 2;
   d.x += d.vx * half;
   d.y += d.vy * half;
   d.z += d.vz * half;
-  const [x, y, z] = [r.x + d.x, r.y + d.y, r.z + d.z];
   if (d.x !== 0 || d.y !== 0 || d.z !== 0) {
-    const nudged = gravityKmPerS2(x, y, z);
-    const untouched = gravityKmPerS2(r.x, r.y, r.z);
+    const nudged = gravityKmPerS2(r.x + d.x, r.y + d.y, r.z + d.z);
+    const untouched = middle.gravity;
     d.vx += (nudged.x - untouched.x) * stepS;
     d.vy += (nudged.y - untouched.y) * stepS;
     d.vz += (nudged.z - untouched.z) * stepS;
   }
-  const { siteKm: s, up } = middle;
-  const [lx, ly, lz] = [x - s.x, y - s.y, z - s.z];
-  const rangeKm = Math.sqrt(lx * lx + ly * ly + lz * lz);
-  const elevationRad = Math.asin((lx * up.x + ly * up.y + lz * up.z) / rangeKm);
+  const { siteKm, up } = middle;
+  const lineX = r.x + d.x - siteKm.x;
+  const lineY = r.y + d.y - siteKm.y;
+  const lineZ = r.z + d.z - siteKm.z;
+  const rangeKm = Math.sqrt(lineX * lineX + lineY * lineY + lineZ * lineZ);
+  const elevationRad = Math.asin((lineX * up.x + lineY * up.y + lineZ * up.z) / rangeKm);
   const kick = pulses * push.deltaVPerPulseMPerS(rangeKm, Math.max(0, elevationRad));
-  if (kick !== 0) applyKick(d, [x, y, z], [v.x + d.vx, v.y + d.vy, v.z + d.vz], [lx, ly, lz], kick / rangeKm);
+  const perKm = kick / rangeKm;
+  if (kick !== 0) applyKick(d, middle.state, lineX * perKm, lineY * perKm, lineZ * perKm);
   d.x += d.vx * half;
   d.y += d.vy * half;
   d.z += d.vz * half;
 }
 
-type Triple = readonly [number, number, number];
-
-/** Adds a kick of `perKm` m/s per km along a line, and its parts along the axes of the moment. */
-function applyKick(d: Deviation, r: Triple, v: Triple, line: Triple, perKm: number): void {
-  const [kx, ky, kz] = [line[0] * perKm, line[1] * perKm, line[2] * perKm];
+/** Adds a kick in m/s, and its parts along the nudged fragment's own axes. */
+function applyKick(d: Deviation, untouched: OrbitState, kx: number, ky: number, kz: number): void {
+  const x = untouched.rKm.x + d.x;
+  const y = untouched.rKm.y + d.y;
+  const z = untouched.rKm.z + d.z;
+  const vx = untouched.vKmPerS.x + d.vx;
+  const vy = untouched.vKmPerS.y + d.vy;
+  const vz = untouched.vKmPerS.z + d.vz;
   d.vx += kx * 1e-3;
   d.vy += ky * 1e-3;
   d.vz += kz * 1e-3;
-  const radius = Math.sqrt(r[0] * r[0] + r[1] * r[1] + r[2] * r[2]);
-  const radial = (kx * r[0] + ky * r[1] + kz * r[2]) / radius;
-  const hx = r[1] * v[2] - r[2] * v[1];
-  const hy = r[2] * v[0] - r[0] * v[2];
-  const hz = r[0] * v[1] - r[1] * v[0];
+  const hx = y * vz - z * vy;
+  const hy = z * vx - x * vz;
+  const hz = x * vy - y * vx;
+  const radius = Math.sqrt(x * x + y * y + z * z);
   const h = Math.sqrt(hx * hx + hy * hy + hz * hz);
-  const normal = (kx * hx + ky * hy + kz * hz) / h;
+  d.radial += (kx * x + ky * y + kz * z) / radius;
+  d.normal += (kx * hx + ky * hy + kz * hz) / h;
   // Transverse = normal × radial, so its part of the kick is k · (h × r) / (|h| |r|).
-  const tx = hy * r[2] - hz * r[1];
-  const ty = hz * r[0] - hx * r[2];
-  const tz = hx * r[1] - hy * r[0];
-  d.radial += radial;
-  d.normal += normal;
-  d.transverse += (kx * tx + ky * ty + kz * tz) / (h * radius);
+  d.transverse += (kx * (hy * z - hz * y) + ky * (hz * x - hx * z) + kz * (hx * y - hy * x)) / (h * radius);
 }
 
 /** Range in km and elevation in radians, not below 0, of the untouched fragment at a point of its track. */

@@ -17,6 +17,8 @@ const HORIZON_TOLERANCE_RAD = 0.01 * DEG;
 /** The untouched fragment and the station at one time, TEME; `up` is the station's geodetic vertical. */
 export interface TrackPoint {
   readonly state: OrbitState;
+  /** Gravity on the untouched fragment, km/s². */
+  readonly gravity: Vec3;
   readonly siteKm: Vec3;
   readonly up: Vec3;
 }
@@ -90,7 +92,8 @@ function trackOf(
     const [before, after] = [nodes[index], nodes[index + 1]];
     if (!before || !after) throw new RangeError("A track has at least two nodes.");
     const state = interpolate(before, after, place - index, spacingMs / 1000);
-    return { state, ...siteAt(frame, atMs) };
+    const gravity = gravityKmPerS2(state.rKm.x, state.rKm.y, state.rKm.z);
+    return { state, gravity, ...siteAt(frame, atMs) };
   };
   const kept: TrackPoint[] = [];
   const firstSecond = Math.floor(fromMs / 1000);
