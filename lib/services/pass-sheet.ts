@@ -1,0 +1,129 @@
+import { database, type Queryable } from "@/db/client";
+import { type PassRow, passHasNotice, passRowsById } from "@/db/queries/passes";
+import type { EstimateBody, PassSheetBody, SampleBody } from "@/lib/contracts/passes";
+import { notFound } from "@/lib/engagement/refusal";
+import type { Actor } from "@/lib/engagement/roles";
+import type { Orbit } from "@/lib/physics/orbit/propagate";
+import { assumptionsOf } from "@/lib/planning/assumptions";
+import { effectOfDwell } from "@/lib/planning/effect";
+import type { Interval } from "@/lib/planning/interval";
+import { buildProfile } from "@/lib/planning/profile";
+import { isoOf } from "./closure-body";
+import { type FactBook, loadFactBook } from "./fact-book";
+import { concernedAuthorities } from "./judge-dwell";
+import { passBody } from "./pass-body";
+import { crossingBodies, elementSetBody, laserBody, stationBody } from "./pass-sheet-parts";
+import { AIM, orbitOrNull } from "./pass-work";
+import { type OfferedPass, planOffers } from "./plan-offers";
+import { elementsByRow } from "./replan-passes";
+import { noticedOnly } from "./search-passes";
+
+/** Samples of a sheet, at most; a pass of ten minutes has one every 5 s. */
+const MOST_SAMPLES = 120;
+
+/**
+ * Everything about one pass, worked out now. A coordinator may read the passes that his authority has
+ * notices about; of others he learns nothing (404).
+ */
+export async function passSheet(actor: Actor, passId: string, nowMs: number): Promise<PassSheetBody> {
+  const authorityId = noticedOnly(actor);
+  const q = database();
+  const [row] = await passRowsById(q, [passId]);
+  if (!row) throw notFound("pass");
+  if (authorityId !== undefined && !(await passHasNotice(q, passId, authorityId))) throw notFound("pass");
+  const book = await loadFactBook(q, [row]);
+  const [offered] = await planOffers(q, book, [row], { nowMs, budgetMs: Number.POSITIVE_INFINITY });
+  if (!offered) throw notFound("pass");
+  return await sheetOf(q, book, row, offered);
+}
+
+async function sheetOf(
+  q: Queryable,
+  book: FactBook,
+  row: PassRow,
+  offered: OfferedPass,
+): Promise<PassSheetBody> {
+  const { reading } = offered;
+  const { scene, figured, facts, geometry } = reading;
+  const orbit = orbitOrNull((await elementsByRow(q, [row])).get(row.elementSetId));
+  const figures = figured.ok ? figured.figures : null;
+  const profile = orbit && figures ? profileOf(offered, orbit) : null;
+  const booked = reading.engagement
+    ? { fromMs: reading.engagement.dwellFrom.getTime(), toMs: reading.engagement.dwellTo.getTime() }
+    : null;
+  const dwell = booked ?? offered.offer.dwell;
+  return {
+    ...passBody(offered),
+    station: stationBody(scene),
+    laser: laserBody(scene),
+    riseAzimuthDeg: row.riseAzimuthDeg,
+    culminationAzimuthDeg: row.culminationAzimuthDeg,
+    setAzimuthDeg: row.setAzimuthDeg,
+    underWayAtFrom: row.underWayAtFrom,
+    underWayAtTo: row.underWayAtTo,
+    elementSet: elementSetBody(row),
+    aim: profile?.aim ?? AIM,
+    aimUnit: profile?.aimUnit ?? "",
+    samples: profile?.samples ?? [],
+    estimate: reading.engagement
+      ? bookedEstimate(reading.engagement)
+      : dwell && orbit
+        ? estimateOf(offered, orbit, dwell)
+        : null,
+    concerned: concernedAuthorities(book, geometry, facts, dwell).map(
+      ({ authorityId, name, kind, because, leadTimeMin }) => ({
+        authorityId,
+        name,
+        kind,
+        because,
+        leadTimeMin,
+      }),
+    ),
+    assumptions: figures ? assumptionsOf(figures.laser, figures.body, row.bodySource) : [],
+    crossings: crossingBodies(book, row),
+  };
+}
+
+/** The worth curve and the samples of the whole pass; null where the model refuses it. */
+function profileOf(
+  offered: OfferedPass,
+  orbit: Orbit,
+): { aim: string; aimUnit: string; samples: SampleBody[] } | null {
+  const { figured, geometry, scene } = offered.reading;
+  if (!figured.ok) return null;
+  const { laser, body } = figured.figures;
+  const span = { fromMs: geometry.riseMs, toMs: geometry.setMs };
+  const stepS = Math.max(5, Math.ceil((span.toMs - span.fromMs) / 1000 / MOST_SAMPLES));
+  const built = buildProfile({ orbit, frame: scene.map.frame, laser, body, ...span, stepS, aim: AIM });
+  if (!built.ok) return null;
+  const samples = built.profile.samples.map((sample) => ({
+    at: isoOf(sample.atMs),
+    elevationDeg: sample.elevationDeg,
+    azimuthDeg: sample.azimuthDeg,
+    rangeKm: sample.rangeKm,
+    transmission: sample.transmission,
+    spotDiameterM: sample.spotDiameterM,
+    fluenceJPerM2: sample.fluenceJPerM2,
+    couplingNPerW: sample.couplingNPerW,
+    deltaVMPerS: sample.deltaVMPerS,
+    worthPerS: sample.worthPerS,
+  }));
+  return { aim: built.profile.aim, aimUnit: built.profile.aimUnit, samples };
+}
+
+/** What was predicted when the dwell was booked. */
+function bookedEstimate(engagement: NonNullable<OfferedPass["reading"]["engagement"]>): EstimateBody {
+  const { aim: _aim, ...effect } = engagement.effect;
+  return { from: engagement.dwellFrom.toISOString(), to: engagement.dwellTo.toISOString(), ...effect };
+}
+
+function estimateOf(offered: OfferedPass, orbit: Orbit, dwell: Interval): EstimateBody | null {
+  const { figured, scene } = offered.reading;
+  if (!figured.ok) return null;
+  const { laser, body } = figured.figures;
+  const { fromMs, toMs } = dwell;
+  const worked = effectOfDwell({ orbit, frame: scene.map.frame, laser, body, fromMs, toMs });
+  if (!worked.ok) return null;
+  const { meltOnsetS: _meltOnsetS, ...effect } = worked.effect;
+  return { from: isoOf(fromMs), to: isoOf(toMs), ...effect };
+}
