@@ -1,5 +1,5 @@
 import { codePoint } from "./faults";
-import { MAX_ITEM_CHARS } from "./limits";
+import { MAX_ITEM_CHARS, MAX_LINE_CHARS } from "./limits";
 
 /** Thrown inside this folder only: the place at which a text stops being JSON. */
 export class JsonFault extends Error {
@@ -82,7 +82,7 @@ function readString(text: string, offset: number): JsonNode {
 
 /** The offset after the closing quote. RFC 8259: control characters stand in a string as escapes only. */
 function endOfString(text: string, offset: number): number {
-  const last = Math.min(text.length, offset + MAX_ITEM_CHARS);
+  const last = Math.min(text.length, offset + MAX_LINE_CHARS);
   for (let at = offset + 1; at < last; at += 1) {
     const c = text.charAt(at);
     if (c === '"') return at + 1;

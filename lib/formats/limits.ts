@@ -1,7 +1,7 @@
 /** Sets read from one text, good and bad together; what follows is not read, and that is said. */
 export const MAX_SETS = 100_000;
 
-/** Characters a line of a TLE, KVN or CSV text may have. */
+/** Characters a line of a TLE, KVN or CSV text may have, or a text in quotes or a tag elsewhere. */
 export const MAX_LINE_CHARS = 4_000;
 
 /** Characters one OMM object or XML element may have; a full one needs some 1,500. */

@@ -13,6 +13,8 @@ export interface OmmField {
   readonly offset: number;
   /** What stands there instead of a value ("a list", "an object", "true"), or null. */
   readonly notAValue: string | null;
+  /** The unit written beside the value, or null. */
+  readonly unit: string | null;
 }
 
 /** One thing wrong in an OMM, at an offset in the text. */
@@ -133,7 +135,8 @@ function readNumbers(
   report: Report,
 ): Record<NumberKey, number> {
   const numbers = {} as Record<NumberKey, number>;
-  for (const { keyword, key, required } of NUMBER_KEYWORDS) {
+  for (const { keyword, key, required, unit } of NUMBER_KEYWORDS) {
+    checkUnit(keyword, unit, fields.get(keyword), report);
     const text = required
       ? requiredValue(fields, keyword, setOffset, report)
       : valueIn(fields, keyword, report);
@@ -151,4 +154,16 @@ function readNumbers(
     );
   }
   return numbers;
+}
+
+/** A unit may be left out; one that is written must be the book's, for the value would mean something else. */
+function checkUnit(
+  keyword: string,
+  expected: string | null,
+  field: OmmField | undefined,
+  report: Report,
+): void {
+  if (!field || field.unit === null || field.unit.toLowerCase() === expected?.toLowerCase()) return;
+  const right = expected === null ? "it has none" : `expected: ${expected}`;
+  report(field.offset, `The unit of ${keyword} is ${quote(field.unit)}; ${right}.`);
 }

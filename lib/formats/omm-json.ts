@@ -1,14 +1,8 @@
-import { fullRejection, isFull, quote, rejectionOf } from "./faults";
+import { isFull, quote } from "./faults";
 import { JsonFault, type JsonNode, readJson, skipSpace } from "./json-positions";
-import { type OmmFault, type OmmField, readOmm } from "./omm-fields";
+import type { OmmFault, OmmField } from "./omm-fields";
+import { beginReading, type OmmReading, rejectOmm, stopsHere, takeOmm, twiceFault } from "./omm-reading";
 import type { ParsedText } from "./set-types";
-import { makeLocator } from "./text-lines";
-
-interface Reading {
-  readonly text: string;
-  readonly locate: (offset: number) => { line: number; column: number };
-  readonly result: ParsedText;
-}
 
 /**
  * Reads OMMs in JSON: one object, a list of objects, or objects one after the other.
@@ -17,14 +11,9 @@ interface Reading {
  * Lines and columns are those of the offending value. Never throws.
  */
 export function parseOmmJson(text: string): ParsedText {
-  const reading: Reading = { text, locate: makeLocator(text), result: { accepted: [], rejected: [] } };
+  const reading = beginReading(text, "omm-json");
   let at = skipSpace(text, 0);
-  while (at < text.length) {
-    if (isFull(reading.result)) {
-      const { line, column } = reading.locate(at);
-      reading.result.rejected.push(fullRejection(line, column));
-      break;
-    }
+  while (at < text.length && !stopsHere(reading, at)) {
     const next = text.charAt(at) === "[" ? readItems(reading, at) : readItem(reading, at).next;
     // A stray closing bracket has been reported and is stepped over here.
     at = skipSpace(text, Math.max(next, at + 1));
@@ -32,14 +21,8 @@ export function parseOmmJson(text: string): ParsedText {
   return reading.result;
 }
 
-function reject(reading: Reading, faults: readonly [OmmFault, ...OmmFault[]], raw: string): void {
-  const placed = ({ offset, message }: OmmFault) => ({ ...reading.locate(offset), message });
-  const [first, ...further] = faults;
-  reading.result.rejected.push(rejectionOf([placed(first), ...further.map(placed)], raw));
-}
-
 /** Reads the list that opens at `start`; gives the offset after it, or the one at which reading had to stop. */
-function readItems(reading: Reading, start: number): number {
+function readItems(reading: OmmReading, start: number): number {
   const { text } = reading;
   let at = skipSpace(text, start + 1);
   if (text.charAt(at) === "]") return at + 1;
@@ -50,10 +33,10 @@ function readItems(reading: Reading, start: number): number {
     if (c === "]") return at + 1;
     if (c === ",") at = skipSpace(text, at + 1);
     else if (c === "{" && item.whole)
-      reject(reading, [{ offset: at, message: "A comma is missing here." }], "");
+      rejectOmm(reading, [{ offset: at, message: "A comma is missing here." }], "");
   }
   if (at >= text.length)
-    reject(reading, [{ offset: start, message: "The list that opens here is not closed." }], "");
+    rejectOmm(reading, [{ offset: start, message: "The list that opens here is not closed." }], "");
   return at;
 }
 
@@ -64,7 +47,7 @@ interface ItemEnd {
 }
 
 /** Reads what stands at `at`, which should be an object, and says where to go on. */
-function readItem(reading: Reading, at: number): ItemEnd {
+function readItem(reading: OmmReading, at: number): ItemEnd {
   const { text } = reading;
   try {
     const node = readJson(text, at);
@@ -73,28 +56,20 @@ function readItem(reading: Reading, at: number): ItemEnd {
   } catch (error) {
     if (!(error instanceof JsonFault)) throw error;
     const next = resumeAfter(text, at, error.offset);
-    reject(reading, [{ offset: error.offset, message: error.message }], text.slice(at, next));
+    rejectOmm(reading, [{ offset: error.offset, message: error.message }], text.slice(at, next));
     return { next, whole: false };
   }
 }
 
-function takeItem(reading: Reading, node: JsonNode, raw: string): void {
+function takeItem(reading: OmmReading, node: JsonNode, raw: string): void {
   if (node.kind !== "object") {
     const message = `This is ${describe(node)}; an object with OMM keywords is expected.`;
-    reject(reading, [{ offset: node.offset, message }], raw);
+    rejectOmm(reading, [{ offset: node.offset, message }], raw);
     return;
   }
   const { fields, twice } = fieldsOf(node);
-  if (twice) {
-    reject(reading, [twice], raw);
-    return;
-  }
-  const read = readOmm(fields, node.offset);
-  if (!read.ok) reject(reading, read.faults, raw);
-  else {
-    const { line } = reading.locate(node.offset);
-    reading.result.accepted.push({ elements: read.elements, format: "omm-json", raw, line });
-  }
+  if (twice) rejectOmm(reading, [twice], raw);
+  else takeOmm(reading, fields, node.offset, raw);
 }
 
 function describe(node: JsonNode): string {
@@ -107,15 +82,10 @@ function describe(node: JsonNode): string {
 function fieldsOf(node: JsonNode): { fields: Map<string, OmmField>; twice: OmmFault | null } {
   const fields = new Map<string, OmmField>();
   for (const { key, keyOffset, value } of node.members) {
-    if (fields.has(key)) {
-      return {
-        fields,
-        twice: { offset: keyOffset, message: `The keyword ${quote(key)} comes twice in this object.` },
-      };
-    }
+    if (fields.has(key)) return { fields, twice: twiceFault(key, keyOffset) };
     const plain = value.kind === "string" || value.kind === "number";
     const notAValue = plain || value.kind === "null" ? null : describe(value);
-    fields.set(key, { text: plain ? value.text : null, offset: value.offset, notAValue });
+    fields.set(key, { text: plain ? value.text : null, offset: value.offset, notAValue, unit: null });
   }
   return { fields, twice: null };
 }

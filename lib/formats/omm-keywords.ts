@@ -32,3 +32,14 @@ export const FIXED_KEYWORDS: readonly { keyword: string; allowed: readonly strin
 
 /** Major versions of the message that are read; the keywords above mean the same in both. */
 export const READ_VERSIONS = /^[23]\.\d+$/;
+
+/** Every keyword that is read; the others are let be. */
+export const READ_KEYWORDS: ReadonlySet<string> = new Set([
+  "CCSDS_OMM_VERS",
+  "OBJECT_NAME",
+  "OBJECT_ID",
+  "EPOCH",
+  "NORAD_CAT_ID",
+  ...NUMBER_KEYWORDS.map((n) => n.keyword),
+  ...FIXED_KEYWORDS.map((f) => f.keyword),
+]);

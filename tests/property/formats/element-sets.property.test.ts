@@ -13,6 +13,18 @@ const OMMS = parseElementSets(LINES.join("\n")).accepted.map((s) => elementsToOm
 const anySet = fc.integer({ min: 0, max: SETS.length - 1 }).map((i) => (SETS[i] ?? []).join("\n"));
 const anyOmm = fc.integer({ min: 0, max: OMMS.length - 1 }).map((i) => JSON.stringify(OMMS[i], null, 1));
 
+/** The same sets in the other encodings, as a test writes them. */
+const anyEncoded = fc
+  .tuple(fc.integer({ min: 0, max: OMMS.length - 1 }), fc.constantFrom("kvn", "xml", "csv"))
+  .map(([i, form]) => {
+    const entries = Object.entries(OMMS[i] ?? {});
+    if (form === "kvn") return entries.map(([k, v]) => `${k} = ${v}`).join("\n");
+    if (form === "csv")
+      return `${entries.map(([k]) => k).join(",")}\n${entries.map(([, v]) => `"${v}"`).join(",")}`;
+    const leaves = entries.filter(([k]) => k !== "CCSDS_OMM_VERS").map(([k, v]) => `<${k}>${v}</${k}>`);
+    return `<ndm><omm version="3.0"><body>${leaves.join("\n")}</body></omm></ndm>`;
+  });
+
 /** A text with some characters replaced, taken out or put in. */
 function damaged(text: fc.Arbitrary<string>): fc.Arbitrary<string> {
   const character = fc.oneof(
@@ -50,8 +62,11 @@ function expectSound(set: ParsedSet, text: string): void {
   expect(numbers.eccentricity).toBeLessThan(1);
   expect(makeOrbit(set.elements).ok).toBe(true);
   expect(set.line).toBeGreaterThan(0);
+  expect(set.raw).not.toContain("\0");
   if (set.format !== "tle") {
-    expect(text).toContain(set.raw);
+    // The raw text of a CSV set is two lines that need not follow each other.
+    for (const part of set.format === "omm-csv" ? set.raw.split(/\r\n|\n|\r/) : [set.raw])
+      expect(text).toContain(part);
     return;
   }
   const [line1 = "", line2 = ""] = set.raw.split(/\r\n|\n|\r/).slice(-2);
@@ -106,6 +121,38 @@ describe("reading element sets", () => {
     fc.assert(
       fc.property(damaged(fc.json()), (text) => void expectAllSound(text)),
       { numRuns: 1_000 },
+    );
+  });
+
+  it("takes the undamaged in every encoding, and nothing unsound from the damaged", () => {
+    fc.assert(
+      fc.property(anyEncoded, (text) => {
+        expect(expectAllSound(text).rejected).toEqual([]);
+      }),
+      { numRuns: 300 },
+    );
+    fc.assert(
+      fc.property(damaged(anyEncoded), (text) => void expectAllSound(text)),
+      { numRuns: 5_000 },
+    );
+    const lead = fc.constantFrom(
+      "{",
+      "[{",
+      "<",
+      "<omm>",
+      "<!--",
+      "A = ",
+      "CCSDS_OMM_VERS = 3.0\n",
+      "EPOCH,BSTAR,NORAD_CAT_ID,X\n",
+      "1 ",
+    );
+    fc.assert(
+      fc.property(
+        lead,
+        fc.string({ unit: "binary", maxLength: 200 }),
+        (head, rest) => void expectAllSound(head + rest),
+      ),
+      { numRuns: 3_000 },
     );
   });
 

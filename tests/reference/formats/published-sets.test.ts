@@ -3,16 +3,21 @@ import { describe, expect, it } from "vitest";
 import { parseElementSets } from "@/lib/formats/element-sets";
 import { elementsToOmm } from "@/lib/formats/elements-to-omm";
 import { readOmmEpoch } from "@/lib/formats/omm-epoch";
+import { LINE1, LINE2, NAME } from "@/tests/unit/formats/lines";
 
-/** The folder of Debian's package python3-sgp4, which carries the published verification file. */
+/** The folder of Debian's package python3-sgp4, which carries the published verification file and samples. */
 const DEBIAN_SGP4 = "/usr/lib/python3/dist-packages/sgp4";
 
-function readVerificationFile(): string {
+function read(name: string): string {
   try {
-    return readFileSync(`${DEBIAN_SGP4}/SGP4-VER.TLE`, "latin1");
+    return readFileSync(`${DEBIAN_SGP4}/${name}`, "latin1");
   } catch (cause) {
-    throw new Error("SGP4-VER.TLE is missing: install Debian's package python3-sgp4", { cause });
+    throw new Error(`${name} is missing: install Debian's package python3-sgp4`, { cause });
   }
+}
+
+function readVerificationFile(): string {
+  return read("SGP4-VER.TLE");
 }
 
 /**
@@ -69,6 +74,25 @@ describe("the published verification file of SGP4", () => {
     expect(found.rejected[0]?.message).toMatch(
       /mean motion is 0.00001 revolutions a day: that orbit would leave the Earth/,
     );
+  });
+});
+
+/**
+ * Object 5 as CelesTrak published it in October 2020 in three forms: sample_omm.csv and sample_omm.xml of
+ * python-sgp4 2.15, and the TLE beside them in its tests.py.
+ */
+describe("the published samples of one object in three forms", () => {
+  const [fromTle] = parseElementSets(`${NAME}\n${LINE1}\n${LINE2}`).accepted;
+
+  it.each([
+    ["sample_omm.csv", "omm-csv"],
+    ["sample_omm.xml", "omm-xml"],
+  ])("are the same elements: %s", (name, format) => {
+    const { accepted, rejected } = parseElementSets(read(name));
+    expect(rejected).toEqual([]);
+    expect(accepted.map((s) => s.format)).toEqual([format]);
+    expect(fromTle?.elements.catalogNumber).toBe(5);
+    expect(accepted[0]?.elements).toEqual(fromTle?.elements);
   });
 });
 

@@ -165,7 +165,7 @@ describe("a bad OMM in JSON is refused at the offending value", () => {
     expect(found).toMatchObject({
       line: 2,
       column: 2,
-      message: 'The keyword "EPOCH" comes twice in this object.',
+      message: 'The keyword "EPOCH" comes twice in this set.',
     });
   });
 

@@ -37,6 +37,8 @@ describe("a good TLE", () => {
     ["a name line after 0", `0 ${NAME}\n`, NAME],
     ["a name that begins like a line 1", "1 EXPLORER\n", "1 EXPLORER"],
     ["a name that begins like a line 2", "2 MANY\n", "2 MANY"],
+    ["a name in brackets", "[DEB] 7\n", "[DEB] 7"],
+    ["a name that looks like another form", "A = <1>\n", "A = <1>"],
     ["no name line", "", null],
   ])("takes its name from %s", (_what, lead, name) => {
     expect(only(`${lead}${LINE1}\n${LINE2}\n`).elements.objectName).toBe(name);
