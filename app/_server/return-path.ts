@@ -5,8 +5,8 @@ const BASE = "http://own.invalid";
 export function safeReturnPath(wanted: string | null | undefined): string {
   if (!wanted?.startsWith("/") || !URL.canParse(wanted, BASE)) return "/";
   const url = new URL(wanted, BASE);
-  if (url.origin !== BASE || url.pathname.startsWith("/sign-in") || url.pathname.startsWith("/api/"))
-    return "/";
+  // "/.//evil.example" resolves to a path that a browser would take for another host.
+  if (url.origin !== BASE || /^\/(?:[/\\]|sign-in|api\/)/.test(url.pathname)) return "/";
   return url.pathname + url.search;
 }
 

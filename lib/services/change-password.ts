@@ -6,6 +6,7 @@ import { notAllowed, Refusal, refused, unknownCaller } from "@/lib/engagement/re
 import type { PersonActor } from "./authenticate";
 import { writeLedger } from "./ledger";
 import { hashPassword, passwordFits, passwordProblem } from "./passwords";
+import { readInput } from "./read-input";
 import { countAttempt, forgiveAttempts } from "./sign-in-throttle";
 
 /**
@@ -15,7 +16,7 @@ import { countAttempt, forgiveAttempts } from "./sign-in-throttle";
  */
 export async function changePassword(actor: PersonActor, input: unknown, address: string): Promise<void> {
   if (actor.via !== "screen") throw notAllowed("changing a password with a token");
-  const { current, next } = passwordInput.parse(input);
+  const { current, next } = readInput(passwordInput, input);
   const waitS = await countAttempt(actor.email, address);
   if (waitS > 0)
     throw new Refusal(429, "throttled", `Too many attempts. Try again in ${Math.ceil(waitS / 60)} min.`);

@@ -18,6 +18,7 @@ import { notAllowed, notFound, type Reason, refused } from "@/lib/engagement/ref
 import type { Actor } from "@/lib/engagement/roles";
 import { writeLedger } from "./ledger";
 import { readPerson, requirePeopleRight } from "./people";
+import { readInput } from "./read-input";
 
 type Settings = Pick<PersonRow, "role" | "authorityId" | "isSafetyOfficer" | "active">;
 
@@ -29,7 +30,7 @@ type Settings = Pick<PersonRow, "role" | "authorityId" | "isSafetyOfficer" | "ac
  */
 export async function changePerson(actor: Actor, id: string, input: unknown): Promise<PersonBody> {
   requirePeopleRight(actor);
-  const change = personChangeInput.parse(input);
+  const change = readInput(personChangeInput, input);
   await inTransaction(async (tx) => {
     const administrators = await lockAdministrators(tx);
     // The actor may have lost the role since the request began.
@@ -57,7 +58,7 @@ export async function changePerson(actor: Actor, id: string, input: unknown): Pr
 /** Ends all sessions of a person at once; their tokens stay. */
 export async function endSessions(actor: Actor, id: string, input: unknown): Promise<void> {
   requirePeopleRight(actor);
-  const { reason } = endSessionsInput.parse(input);
+  const { reason } = readInput(endSessionsInput, input);
   await inTransaction(async (tx) => {
     const person = await lockPerson(tx, id);
     if (!person) throw notFound("person");

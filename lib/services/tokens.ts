@@ -6,6 +6,7 @@ import { type NewTokenBody, type TokenBody, tokenInput } from "@/lib/contracts/a
 import { notFound, refused, unknownCaller } from "@/lib/engagement/refusal";
 import { hashToken, type PersonActor } from "./authenticate";
 import { writeLedger } from "./ledger";
+import { readInput } from "./read-input";
 
 const MOST_TOKENS = 20;
 
@@ -22,7 +23,7 @@ export async function listTokens(actor: PersonActor): Promise<{ tokens: TokenBod
 
 /** Makes a token that can do what its owner can. The answer is the only place where it is ever shown. */
 export async function createToken(actor: PersonActor, input: unknown): Promise<NewTokenBody> {
-  const { label } = tokenInput.parse(input);
+  const { label } = readInput(tokenInput, input);
   return inTransaction(async (tx) => {
     if (!(await lockPerson(tx, actor.id))?.active) throw unknownCaller();
     if ((await liveTokens(tx, actor.id)).length >= MOST_TOKENS) {
