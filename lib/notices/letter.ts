@@ -66,11 +66,14 @@ function openingOf(facts: NoticeFacts): string[] {
   const where = `${facts.station.name} proposes to point a pulsed laser at a piece of orbital debris`;
   switch (facts.kind) {
     case "request":
-      return [`${where} for ${lengthS(facts)} s.`, `You are asked because ${facts.because}.`];
+      return [
+        `${where} for ${lengthS(facts)} s.`,
+        `${facts.authority.name} is concerned because ${facts.because}.`,
+      ];
     case "revised request":
       return [
         "The request you had for this dwell no longer holds. Any answer to it is void: please answer again.",
-        `You are asked because ${facts.because}.`,
+        `${facts.authority.name} is concerned because ${facts.because}.`,
       ];
     case "cancellation":
       return [
@@ -116,7 +119,10 @@ function beamRows(facts: NoticeFacts): [string, string][] {
   return [
     ["Beam at the start", pointWords(start)],
     ["Beam at the end", pointWords(end)],
-    ["Elevation in between", `${minElevationDeg.toFixed(1)}° to ${maxElevationDeg.toFixed(1)}°, up to space`],
+    [
+      "Elevation range",
+      `${minElevationDeg.toFixed(1)}° to ${maxElevationDeg.toFixed(1)}°, ground to unlimited`,
+    ],
     laser,
   ];
 }

@@ -38,7 +38,7 @@ describe("a request", () => {
       "https://book.example.invalid/answer/abc.def",
       "not a NOTAM",
       "nor is it a clearance",
-      "every dwell at Alder Point concerns you",
+      "Brume Air Unit is concerned because it is asked about every engagement at Alder Point.",
     ];
     for (const figure of figures) {
       expect(textBody).toContain(figure);

@@ -7,7 +7,7 @@ export const REQUEST: NoticeFacts = {
   engagementNumber: 1042,
   sequence: 0,
   authority: { name: "Brume Air Unit", email: "desk@brume.invalid", timeZone: "Europe/Zurich" },
-  because: "every dwell at Alder Point concerns you",
+  because: "it is asked about every engagement at Alder Point",
   station: { name: "Alder Point", latitudeDeg: 46.5, longitudeDeg: -8.2, altitudeM: 1400 },
   fragment: { name: "Fragment 88001", number: "catalogue number 88001" },
   laser: { wavelengthNm: 1064, pulseEnergyJ: 20_000, pulseWidthNs: 5, repetitionRateHz: 10, apertureM: 8 },
