@@ -56,13 +56,15 @@ function followWords(child, dataDir, onReady) {
 /**
  * Starts the whole product with fresh data on a free port, by the very command that people use.
  * @param {string} dataDir
- * @param {NodeJS.ProcessEnv} surroundings
+ * @param {Record<string, string | undefined>} surroundings
+ * @param {() => boolean} isEnding whether the tests are being ended: then nothing is started any more
  * @returns {Promise<{ untilReady: () => Promise<{ address: string, mailPage: string }>, stop: () => Promise<void> }>}
  */
-export async function startProduct(dataDir, surroundings) {
+export async function startProduct(dataDir, surroundings, isEnding) {
   await discardProduct(dataDir);
   ensureDataDir(dataDir);
   const port = await freePort();
+  if (isEnding()) throw new Problem("The tests are being ended.");
   const child = spawn(process.execPath, [join(treeDir, "lib/run/start.mjs")], {
     cwd: treeDir,
     env: { ...plainSurroundings(surroundings), PORT: String(port), DWELLBOOK_DATA_DIR: dataDir },

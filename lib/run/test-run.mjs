@@ -22,6 +22,7 @@ const state = { lock: null, product: null, counts: [], ending: false };
 
 /** Runs a step and counts one failure when it cannot even be done. */
 async function step(title, work) {
+  if (state.ending) return;
   try {
     const count = await work();
     if (count) state.counts.push(count);
@@ -59,7 +60,7 @@ async function prepareTemplate(env) {
 }
 
 async function runBrowserTests(env, surroundings) {
-  state.product = await startProduct(productDir, surroundings);
+  state.product = await startProduct(productDir, surroundings, () => state.ending);
   const { address, mailPage } = await state.product.untilReady();
   state.counts.push({ passed: 1, failed: 0 });
   const browserEnv = {
@@ -77,6 +78,7 @@ async function runAll() {
   await ensureNodeModules();
   await ensureTestTools();
   const env = { ...plainSurroundings(process.env), TZ: "UTC", NEXT_TELEMETRY_DISABLED: "1" };
+  if (!process.stdout.isTTY) env.NO_COLOR = "1";
   await step("Lint", () => lint(env));
   await step("Types", () => checkTypes(env));
   say("Making sure of PostgreSQL for the tests …");
@@ -90,8 +92,8 @@ async function runAll() {
 
 /** Ends all that runs. */
 async function cleanUp() {
-  await state.product?.stop();
   await endCommands(500);
+  await state.product?.stop();
   await endServers(1_500);
 }
 
