@@ -84,7 +84,7 @@ export const engagements = pgTable(
 /** Values a person captured at confirmation. */
 export interface Checklist {
   readonly airUnitCalledAt: string;
-  readonly spotterInPlace: boolean;
+  readonly spotterInPlace: true;
   readonly interlockTestedAt: string;
   readonly clockOffsetMs: number;
   readonly weather: string;
