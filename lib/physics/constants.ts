@@ -23,8 +23,8 @@ export const WGS72_MU_KM3_PER_S2 = 398600.8;
 export const WGS72_RADIUS_KM = 6378.135;
 export const WGS72_J2 = 0.001082616;
 
-/** Mean radius of the Sun's photosphere, km (nominal value, IAU 2015 resolution B3). */
-export const SUN_RADIUS_KM = 695700;
+/** Radius of the Sun, km (Vallado, with whose shadow cones ours are compared; IAU 2015 has 695,700). */
+export const SUN_RADIUS_KM = 696000;
 
 /** Astronomical unit, km (IAU 2012 resolution B2, exact). */
 export const ASTRONOMICAL_UNIT_KM = 149597870.7;
