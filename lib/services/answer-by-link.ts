@@ -10,7 +10,7 @@ import { readLink } from "@/lib/notices/answer-link";
 import { oneLine } from "@/lib/notices/words";
 import { noticeReasons, takeAnswer } from "./answer-notice";
 import { noticeKind } from "./notice-body";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 
 /** What the page behind a link shows. Reading changes nothing: mail scanners open links too. */
 export async function readAnswerPage(token: string, nowMs: number): Promise<AnswerPageBody> {
@@ -27,7 +27,7 @@ export async function openByLink(token: string, nowMs: number): Promise<void> {
 /** Takes the answer given on the page; the name is needed, since nobody signed in. */
 export async function answerByLink(token: string, input: unknown, nowMs: number): Promise<AnswerPageBody> {
   const noticeId = noticeIdOf(token);
-  const answer = readInput(answerInput, input);
+  const answer = await readBody(answerInput, input);
   const name = oneLine(answer.name ?? "");
   if (name === "") throw refused("Who answers?", [{ path: "name", message: "Give your name." }]);
   return inTransaction(async (tx) => {

@@ -1,4 +1,4 @@
-import type { Transaction } from "@/db/client";
+import { database, type Transaction } from "@/db/client";
 import { insertAnswer, voidAnswerOfNotice } from "@/db/queries/answers";
 import { type NoticeRow, noticeById } from "@/db/queries/notices";
 import { inTransaction } from "@/db/transaction";
@@ -13,7 +13,7 @@ import { factsOfRow, type Locked, lockEngagement } from "./engagement-lock";
 import { SYSTEM, writeLedger } from "./ledger";
 import { noticeBodyById } from "./notice-body";
 import { forbid, permit } from "./permit";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { sendBack } from "./send-back";
 
 /**
@@ -27,12 +27,14 @@ export async function answerNotice(
   nowMs: number,
 ): Promise<NoticeBody> {
   if (!may(actor, "answer notices")) throw notAllowed("answer a notice");
+  const notice = await noticeById(database(), noticeId);
+  if (notice === null) throw notFound("notice");
+  if (notice.authorityId !== actor.authorityId) {
+    throw forbid("Only the authority it was sent to answers a notice.");
+  }
+  const answer = await readBody(answerInput, input);
   return inTransaction(async (tx) => {
-    const notice = await noticeById(tx, noticeId);
-    if (notice === null) throw notFound("notice");
-    if (notice.authorityId !== actor.authorityId)
-      throw forbid("Only the authority it was sent to answers a notice.");
-    await takeAnswer(tx, actor, notice, readInput(answerInput, input), nowMs);
+    await takeAnswer(tx, actor, notice, answer, nowMs);
     return noticeBodyById(tx, noticeId);
   });
 }

@@ -14,7 +14,7 @@ import { overlapRefusal, refuseWhenHeld } from "./hold-conflict";
 import { type Judgement, judgeDwell } from "./judge-dwell";
 import { writeLedger } from "./ledger";
 import { type RoundMember, raiseNotices } from "./raise-notices";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
 /**
@@ -25,7 +25,7 @@ import { currentBody } from "./view-engagement";
 export async function bookEngagement(actor: Actor, input: unknown, nowMs: number): Promise<EngagementBody> {
   if (!may(actor, "propose") || actor.id === null) throw notAllowed("propose an engagement");
   const plannerId = actor.id;
-  const wanted = readInput(bookInput, input);
+  const wanted = await readBody(bookInput, input);
   const dwell = dwellOf(wanted);
   try {
     return await inTransaction((tx) => book(tx, { actor, plannerId, passId: wanted.passId, dwell, nowMs }));

@@ -13,7 +13,7 @@ import { judgedFacts } from "./decision-facts";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
 import { writeLedger } from "./ledger";
 import { forbid, permit } from "./permit";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
 type Confirmation = ReturnType<typeof confirmInput.parse>;
@@ -33,7 +33,7 @@ export async function confirmEngagement(
   if (!may(actor, "confirm") && !actor.isSafetyOfficer) {
     throw forbid("An administrator confirms only as safety officer.");
   }
-  const confirmation = readInput(confirmInput, input);
+  const confirmation = await readBody(confirmInput, input);
   return inTransaction(async (tx) => {
     await confirm(tx, actor, id, confirmation, nowMs);
     return currentBody(tx, id, nowMs);

@@ -19,7 +19,7 @@ import { type Judgement, judgeDwell } from "./judge-dwell";
 import { writeLedger } from "./ledger";
 import { permit } from "./permit";
 import { type RoundMember, raiseNotices } from "./raise-notices";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
 /**
@@ -34,7 +34,7 @@ export async function moveEngagement(
   nowMs: number,
 ): Promise<EngagementBody> {
   if (!may(actor, "move own")) throw notAllowed("move an engagement");
-  const wanted = readInput(moveInput, input);
+  const wanted = await readBody(moveInput, input);
   try {
     return await inTransaction(async (tx) => {
       const locked = await lockEngagement(tx, id);

@@ -50,3 +50,11 @@ export function readQuery<T extends z.ZodType>(schema: T, query: unknown): z.inf
     throw error;
   }
 }
+
+/**
+ * Reads a body that may not have been fetched yet: handlers hand over the function
+ * that reads it, so that who asks is judged before what is asked.
+ */
+export async function readBody<T extends z.ZodType>(schema: T, body: unknown): Promise<z.infer<T>> {
+  return readInput(schema, typeof body === "function" ? await body() : body);
+}

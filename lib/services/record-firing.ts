@@ -12,7 +12,7 @@ import { endEngagement } from "./end-engagement";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
 import { permit } from "./permit";
 import { addJob } from "./queue";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
 type FireInput = ReturnType<typeof fireInput.parse>;
@@ -30,7 +30,7 @@ export async function recordFiring(
 ): Promise<EngagementBody> {
   if (!may(actor, "record firing") || actor.id === null) throw notAllowed("record a firing");
   const recordedBy = actor.id;
-  const record = readInput(fireInput, input);
+  const record = await readBody(fireInput, input);
   return inTransaction(async (tx) => {
     await fire(tx, { actor, recordedBy, id, record, nowMs });
     return currentBody(tx, id, nowMs);

@@ -7,7 +7,7 @@ import { coordinationFacts } from "./decision-facts";
 import { endEngagement } from "./end-engagement";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
 import { permit } from "./permit";
-import { readInput } from "./read-input";
+import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
 /**
@@ -21,7 +21,7 @@ export async function scrubEngagement(
   nowMs: number,
 ): Promise<EngagementBody> {
   if (!may(actor, "scrub any") && !may(actor, "scrub own")) throw notAllowed("scrub an engagement");
-  const { reason } = readInput(scrubInput, input);
+  const { reason } = await readBody(scrubInput, input);
   return inTransaction(async (tx) => {
     const { engagement } = await lockEngagement(tx, id);
     const facts = { ...(await coordinationFacts(tx, actor, id)), reason };
