@@ -26,12 +26,13 @@ export function productParts(env, mail) {
 
 /**
  * What is said once everything works: the addresses and the demo sign-ins, never a token.
- * @param {{ address: string, mailPage: string | undefined, dataDir: string }} product
+ * @param {{ address: string, mailPage: string | undefined, dataDir: string, hasDemo: boolean }} product hasDemo is false
+ *   for an outside database with people of its own: the sign-ins kept here are not theirs
  */
-export function readyWords({ address, mailPage, dataDir }) {
+export function readyWords({ address, mailPage, dataDir, hasDemo }) {
   const lines = ["", `Dwellbook is ready: ${address}`];
   if (mailPage) lines.push(`Its mail, which stays on this machine: ${mailPage}`);
-  const table = readAccessTable(dataDir);
+  const table = hasDemo ? readAccessTable(dataDir) : "";
   if (table !== "") lines.push("", "Demo sign-ins:", table);
   lines.push("", `Logs are in ${join(dataDir, "logs")}. Ctrl-C ends all of it.`, "");
   return lines.join("\n");

@@ -20,7 +20,15 @@ import { createSupervisor } from "./supervisor.mjs";
 import { Problem, say, tellFailure } from "./words.mjs";
 
 /** Everything that must be ended, filled in as the start goes on. */
-const house = { lock: null, supervisor: null, cluster: null, children: [], address: null, stopping: false };
+const house = {
+  lock: null,
+  supervisor: null,
+  cluster: null,
+  children: [],
+  address: null,
+  hasDemo: false,
+  stopping: false,
+};
 
 /** Ends web server, workers, mail and PostgreSQL, in this order and within four seconds, and then this process. */
 async function stop(code, reason) {
@@ -86,6 +94,7 @@ async function fillDatabase(env, outside) {
   say("Preparing the demo (all of it invented) …");
   await seedDemo(env);
   protectAccess(env.DWELLBOOK_DATA_DIR);
+  house.hasDemo = true;
 }
 
 /** PostgreSQL is watched too; on the same port it comes back, on another one the others could not find it. */
@@ -145,7 +154,9 @@ async function startAndWait({ env, dataDir, port, mail }) {
     );
   }
   const mailPage = mail ? env.DWELLBOOK_MAIL_PAGE_URL : undefined;
-  process.stdout.write(`${readyWords({ address: house.address, mailPage, dataDir })}\n`);
+  process.stdout.write(
+    `${readyWords({ address: house.address, mailPage, dataDir, hasDemo: house.hasDemo })}\n`,
+  );
 }
 
 function fail(error) {
