@@ -1,10 +1,11 @@
 import { describe, expect, it } from "vitest";
+import type { DwellLimits } from "@/lib/planning/choose-dwell";
 import { type Closure, cutClosures, type Verdict } from "@/lib/planning/closure";
 import { brokenLimits, fitsOpenings } from "@/lib/planning/dwell-limits";
 import { openingsOf } from "@/lib/planning/openings";
 
 const PASS = { riseMs: 0, setMs: 600_000 };
-const LIMITS = {
+const LIMITS: DwellLimits = {
   acquisitionS: 30,
   guardS: 2,
   minDwellS: 10,
