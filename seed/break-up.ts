@@ -6,7 +6,7 @@ export interface InventedFragment {
   readonly orbit: InventedOrbit;
   readonly massKg: number;
   readonly areaM2: number;
-  readonly material: "aluminium" | "titanium" | "steel" | "carbon fibre" | "polyimide";
+  readonly material: "aluminium" | "titanium" | "steel" | "carbon-fibre" | "polyimide";
 }
 
 const COUNT = 40;
@@ -43,7 +43,7 @@ export function inventBreakUp(): InventedFragment[] {
         "aluminium",
         "titanium",
         "steel",
-        "carbon fibre",
+        "carbon-fibre",
       ] as const),
     };
   });
