@@ -33,6 +33,9 @@ const DECAY_RADIUS_KM = 6380;
 /** Beyond this a result is garbage: the Moon's distance is 384,400 km, and SGP4 knows no such orbits. */
 const FARTHEST_RADIUS_KM = 1_000_000;
 
+/** 1,000 km/s, squared. */
+const GREATEST_SPEED2 = 1e6;
+
 /** What SGP4's error numbers mean (Vallado et al. 2006, AIAA 2006-6753), as ends of a sentence. */
 const SGP4_ERRORS: Readonly<Record<number, string>> = {
   1: "the mean eccentricity leaves the range from 0 to 1",
@@ -68,10 +71,17 @@ function propagate(satrec: SatRec, epochMs: number, atMs: number): Propagation {
   const { position, velocity } = result;
   const radiusKm = Math.sqrt(position.x ** 2 + position.y ** 2 + position.z ** 2);
   const speed2 = velocity.x ** 2 + velocity.y ** 2 + velocity.z ** 2;
-  // Written so that NaN fails too.
-  if (!(radiusKm < FARTHEST_RADIUS_KM && speed2 < 1e6)) return failure(atMs, "SGP4 gives no finite state");
   if (radiusKm < DECAY_RADIUS_KM || checkForDecay(satrec)) return failure(atMs, "the object has decayed");
+  if (!isUsableState(radiusKm, speed2)) return failure(atMs, "SGP4 gives no finite state");
   return { ok: true, state: { rKm: position, vKmPerS: velocity } };
+}
+
+/**
+ * Whether a state may be used at all: its distance from the Earth's centre (km) and the square of its speed
+ * (km²/s²) are finite, not decayed and not beyond reason. Written so that NaN fails.
+ */
+export function isUsableState(radiusKm: number, speed2: number): boolean {
+  return radiusKm >= DECAY_RADIUS_KM && radiusKm < FARTHEST_RADIUS_KM && speed2 < GREATEST_SPEED2;
 }
 
 function failure(atMs: number, what: string): Propagation {
