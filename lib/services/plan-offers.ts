@@ -8,6 +8,9 @@ import { measureRow, orbitOrNull, planRow, storedGeometryOf, unmeasured } from "
 import { knownOffer, type Offer, type PassReading, planOffer, readPass } from "./read-pass";
 import { elementsByRow } from "./replan-passes";
 
+/** So many passes are read before other requests get their turn: some 20 ms. */
+const READ_AT_ONCE = 500;
+
 /** A pass with what it offers, and the plan behind it where it was made just now. */
 export interface OfferedPass {
   readonly reading: PassReading;
@@ -26,11 +29,13 @@ export async function planOffers(
   rows: readonly PassRow[],
   options: { readonly nowMs: number; readonly budgetMs: number },
 ): Promise<OfferedPass[]> {
-  const read = rows.map((row) => {
+  const read: { reading: PassReading; offer: Offer | null }[] = [];
+  for (const [i, row] of rows.entries()) {
+    if (i % READ_AT_ONCE === READ_AT_ONCE - 1) await nextTurn();
     const geometry = storedGeometryOf(row, sceneOf(book, row));
     const reading = readPass(book, row, geometry ?? unmeasured(row), options.nowMs);
-    return { reading, offer: geometry ? knownOffer(reading) : null };
-  });
+    read.push({ reading, offer: geometry ? knownOffer(reading) : null });
+  }
   const open = read.filter(({ offer }) => offer === null).map(({ reading }) => reading.row);
   const elements = await elementsByRow(q, open);
   const deadline = performance.now() + options.budgetMs;
