@@ -22,6 +22,21 @@ export async function lockImports(q: Queryable): Promise<void> {
   await q.execute(sql`select pg_advisory_xact_lock(72830119)`);
 }
 
+/**
+ * Waits for the import under way, lets none begin in this transaction, and gives the database's time: what
+ * is read now is everything imported before that time, and what comes later carries a later one.
+ */
+export async function holdImports(q: Queryable): Promise<Date> {
+  await q.execute(sql`select pg_advisory_xact_lock_shared(72830119)`);
+  const { rows } = await q.execute<{ now_ms: number }>(
+    sql`select floor(extract(epoch from clock_timestamp()) * 1000)::float8 as now_ms`,
+  );
+  return new Date(rows[0]?.now_ms ?? Number.NaN);
+}
+
+/** The time of this statement, not of the transaction's begin: see {@link holdImports}. */
+const thisMoment = sql`clock_timestamp()`;
+
 /** The fragments under these catalogue numbers. */
 export async function fragmentsNumbered(q: Queryable, numbers: readonly number[]): Promise<KnownObject[]> {
   const rows = await q
@@ -64,7 +79,8 @@ export async function insertProtected(
 ): Promise<KnownObject[]> {
   const added: KnownObject[] = [];
   for (const part of parts(rows)) {
-    const back = await q.insert(protectedObjects).values(part).returning();
+    const timed = part.map((row) => ({ ...row, createdAt: thisMoment }));
+    const back = await q.insert(protectedObjects).values(timed).returning();
     added.push(...back.map(({ id, catalogNumber, name }) => ({ id, catalogNumber, name })));
   }
   return added;
@@ -99,7 +115,8 @@ export async function insertElementSets(
 ): Promise<ElementSetRow[]> {
   const added: ElementSetRow[] = [];
   for (const part of parts(rows)) {
-    added.push(...(await q.insert(elementSets).values(part).onConflictDoNothing().returning()));
+    const timed = part.map((row) => ({ ...row, importedAt: thisMoment }));
+    added.push(...(await q.insert(elementSets).values(timed).onConflictDoNothing().returning()));
   }
   return added;
 }

@@ -1,4 +1,4 @@
-import { and, eq, sql } from "drizzle-orm";
+import { and, desc, eq, inArray, sql } from "drizzle-orm";
 import type { Queryable } from "../client";
 import { fragments } from "../schema/objects";
 import { sweepChunks, sweeps } from "../schema/passes";
@@ -121,4 +121,80 @@ export async function failExhaustedChunks(q: Queryable, jobKeyPrefix: string): P
 /** Removes sweeps that ended before `beforeAt`, with their chunks; passes stay. */
 export async function deleteOldSweeps(q: Queryable, beforeAt: Date): Promise<void> {
   await q.execute(sql`delete from sweeps where finished_at < ${beforeAt.toISOString()}::timestamptz`);
+}
+
+/** A sweep with the sums over its chunks. */
+export interface SweepProgressRow {
+  readonly id: string;
+  readonly state: "running" | "done" | "cancelled";
+  readonly reason: string;
+  readonly fromAt: Date;
+  readonly toAt: Date;
+  readonly startedAt: Date;
+  readonly finishedAt: Date | null;
+  readonly fragmentCount: number;
+  readonly fragmentsDone: number;
+  readonly fragmentsFailed: number;
+  readonly passCount: number;
+}
+
+/** Sweeps with their progress, newest first. */
+export async function sweepProgressRows(q: Queryable, ids: readonly string[]): Promise<SweepProgressRow[]> {
+  if (ids.length === 0) return [];
+  const fragmentsIn = (state: string) =>
+    sql<number>`coalesce(sum(jsonb_array_length(${sweepChunks.fragmentIds})) filter (where ${sweepChunks.state} = ${state}), 0)::int`;
+  const rows = await q
+    .select({
+      id: sweeps.id,
+      state: sweeps.state,
+      reason: sweeps.reason,
+      fromAt: sweeps.fromAt,
+      toAt: sweeps.toAt,
+      startedAt: sweeps.startedAt,
+      finishedAt: sweeps.finishedAt,
+      fragmentCount: sql<number>`coalesce(sum(jsonb_array_length(${sweepChunks.fragmentIds})), 0)::int`,
+      fragmentsDone: fragmentsIn("done"),
+      fragmentsFailed: fragmentsIn("failed"),
+      passCount: sql<number>`coalesce(sum(${sweepChunks.passCount}), 0)::int`,
+    })
+    .from(sweeps)
+    .leftJoin(sweepChunks, eq(sweepChunks.sweepId, sweeps.id))
+    .where(inArray(sweeps.id, [...ids]))
+    .groupBy(sweeps.id)
+    .orderBy(desc(sweeps.startedAt), sweeps.id);
+  // The table's check constraint admits these states only.
+  return rows.map((row) => ({ ...row, state: row.state as SweepProgressRow["state"] }));
+}
+
+/** The identifiers of the newest sweeps. */
+export async function newestSweeps(q: Queryable, limit: number): Promise<string[]> {
+  const rows = await q
+    .select({ id: sweeps.id })
+    .from(sweeps)
+    .orderBy(desc(sweeps.startedAt), sweeps.id)
+    .limit(limit);
+  return rows.map((row) => row.id);
+}
+
+/** What a sweep could not work out, with the fragment's name. */
+export async function sweepFailures(
+  q: Queryable,
+  sweepId: string,
+): Promise<{ fragmentId: string; fragmentName: string; message: string }[]> {
+  const { rows } = await q.execute<{ id: string; name: string | null; message: string }>(sql`
+    select each.failure ->> 'fragmentId' as id, f.name, each.failure ->> 'message' as message
+    from sweep_chunks c
+      cross join lateral jsonb_array_elements(c.failures) as each(failure)
+      left join fragments f on f.id = (each.failure ->> 'fragmentId')::uuid
+    where c.sweep_id = ${sweepId} order by f.name, 3`);
+  return rows.map(({ id, name, message }) => ({ fragmentId: id, fragmentName: name ?? id, message }));
+}
+
+/** Which of these fragments there are. */
+export async function fragmentsById(q: Queryable, ids: readonly string[]): Promise<string[]> {
+  const rows = await q
+    .select({ id: fragments.id })
+    .from(fragments)
+    .where(inArray(fragments.id, [...ids]));
+  return rows.map((row) => row.id);
 }

@@ -1,6 +1,17 @@
 import type { Task } from "./task";
 import { keepWeekFilledTask } from "./tasks/keep-week-filled";
+import { lapseEngagementsTask } from "./tasks/lapse-engagements";
 import { pruneWorkersTask } from "./tasks/prune-workers";
+import { rescreenEngagementTask } from "./tasks/rescreen-engagement";
+import { sendNoticeTask } from "./tasks/send-notice";
+import { sweepChunkTask } from "./tasks/sweep-chunk";
 
 /** Every kind of job that a worker knows. */
-export const TASKS: readonly Task[] = [keepWeekFilledTask, pruneWorkersTask];
+export const TASKS: readonly Task[] = [
+  sweepChunkTask,
+  keepWeekFilledTask,
+  pruneWorkersTask,
+  sendNoticeTask,
+  lapseEngagementsTask,
+  rescreenEngagementTask,
+];

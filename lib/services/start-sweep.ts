@@ -21,8 +21,11 @@ export const SWEEP_SPAN_MS = 7 * DAY_MS;
 /** How far the end of the last sweep may fall behind that span before it is swept again. */
 const HORIZON_SLACK_MS = 6 * HOUR_MS;
 
-/** Fragments in one chunk: few enough that it holds its process for at most 2 s. */
-export const FRAGMENTS_PER_CHUNK = 2;
+/**
+ * Fragments in one chunk, which is to hold its process for at most 2 s: one over four stations has some 75
+ * passes in a week, at about 20 ms each with screening and planning (measured).
+ */
+const FRAGMENTS_PER_CHUNK = 1;
 
 /** Attempts of a chunk, over some five minutes by the library's backoff. */
 const CHUNK_ATTEMPTS = 6;
