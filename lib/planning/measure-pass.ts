@@ -13,8 +13,8 @@ export interface ElevationLimits {
   readonly maxElevationDeg: number;
 }
 
-/** Rise and set lie at the floor to 0.1 s; so much under it is not a finding, degrees. */
-const FLOOR_TOLERANCE_DEG = 0.02;
+/** Rise and set are kept to a millisecond; so much under the floor is not a finding, degrees. */
+const FLOOR_TOLERANCE_DEG = 0.002;
 
 /** Longest step between two samples of a pass, ms. */
 const STEP_MS = 1000;
