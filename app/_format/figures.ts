@@ -18,6 +18,12 @@ export function significantText(value: number, digits = 3): string {
   return numberText(value, Math.min(decimals, 12));
 }
 
+/** A setting as it was entered: up to so many decimals, without zeros behind. */
+export function settingText(value: number, mostDecimals = 4): string {
+  const text = numberText(value, mostDecimals);
+  return text.includes(".") ? text.replace(/\.?0+$/, "") : text;
+}
+
 /** `9 min 18 s`, `1 h 04 min`, `42 s`. Whole seconds. */
 export function durationText(seconds: number): string {
   if (!Number.isFinite(seconds)) return "no value";
@@ -40,9 +46,19 @@ const PREFIXES = [
 
 /** A figure with its SI prefix: 4100000 J reads as value "4.10", unit "MJ". */
 export function scaled(value: number, unit: string, digits = 3): { value: string; unit: string } {
-  const size = Math.abs(value);
-  const prefix = PREFIXES.find((p) => size >= p.factor) ?? (size === 0 ? PREFIXES[3] : PREFIXES[5]);
+  const prefix = prefixFor(value);
   return { value: significantText(value / prefix.factor, digits), unit: prefix.sign + unit };
+}
+
+/** A setting with its unit and SI prefix, as it was entered: `7 kJ`. */
+export function settingWithUnit(value: number, unit: string): string {
+  const prefix = prefixFor(value);
+  return `${settingText(value / prefix.factor)}${THIN}${prefix.sign}${unit}`;
+}
+
+function prefixFor(value: number) {
+  const size = Math.abs(value);
+  return PREFIXES.find((p) => size >= p.factor) ?? (size === 0 ? PREFIXES[3] : PREFIXES[5]);
 }
 
 /** Degrees of latitude or longitude with a letter for the half: `12.345° N`. */
