@@ -87,9 +87,7 @@ async function prepareDatabase(dataDir, env) {
   return { databaseUrl: cluster.databaseUrl, ownerUrl: cluster.ownerUrl, outside: false };
 }
 
-async function fillDatabase(env, outside) {
-  say("Bringing the database up to date …");
-  await migrate(env);
+async function fillDemo(env, outside) {
   if (outside && env.DWELLBOOK_DEMO !== "1" && !(await hasNoPeople(env.DATABASE_URL))) return;
   say("Preparing the demo (all of it invented) …");
   await seedDemo(env);
@@ -125,8 +123,10 @@ async function start() {
   const mail = process.env.SMTP_URL ? null : await keptPorts(dataDir);
   const secrets = keptSecrets(dataDir);
   const env = childEnvironment({ surroundings: process.env, dataDir, port, ...urls, secrets, mail });
-  await fillDatabase(env, outside);
-  await ensureBuild(env);
+  say("Bringing the database up to date …");
+  await migrate(env);
+  // Neither needs the other, and each keeps about one core busy.
+  await Promise.all([fillDemo(env, outside), ensureBuild(env)]);
   // The build may have taken a minute, in which another program can have come.
   await chooseWebPort(port);
   await startAndWait({ env, dataDir, port, mail });
