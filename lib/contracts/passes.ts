@@ -8,6 +8,9 @@ export const passQuery = z.strictObject({
   to: instantText.optional(),
 });
 
+/** A dwell to be judged without booking it. */
+export const judgementQuery = z.strictObject({ from: instantText, to: instantText });
+
 export type Verdict = "closed" | "pending" | "not checked";
 
 /** A closure as screens and scripts see it. */
@@ -158,4 +161,14 @@ export interface EstimateBody extends SpanBody {
   readonly semiMajorAxisAfterKm: BandBody;
   readonly perigeeBeforeKm: number;
   readonly perigeeAfterKm: BandBody;
+}
+
+/** What booking a dwell would meet: GET /api/passes/:id/judgement. */
+export interface JudgementBody extends SpanBody {
+  /** Every reason for which it would be refused; empty when it may be proposed. */
+  readonly refusals: readonly { readonly path: string; readonly message: string }[];
+  readonly pending: readonly ClosureBody[];
+  readonly notChecked: readonly ClosureBody[];
+  readonly estimate: EstimateBody | null;
+  readonly concerned: PassSheetBody["concerned"];
 }
