@@ -32,6 +32,13 @@ const PROFILE_STEP_S = 2;
 const MELT_SHARE = 0.95;
 
 /**
+ * A planned dwell keeps so much more from rise and from every edge than it must: the next element set
+ * moves the edges by some tenths of a second, and a booked engagement should not fall for that, s.
+ */
+const ACQUISITION_ALLOWANCE_S = 2;
+const EDGE_ALLOWANCE_S = 1;
+
+/**
  * Works out the strip and the best dwell of a pass. Pure: services that have a database use
  * `replanPasses` (lib/services/replan-passes.ts), which gathers the arguments and stores the result.
  */
@@ -56,7 +63,12 @@ export function planPass(args: PlanArgs): StoredPlan {
     profile,
     riseMs: pass.riseMs,
     openings: openingsOf(pass, args.closures),
-    limits: { ...limits, maxHeatingS: least(limits.maxHeatingS, meltS) },
+    limits: {
+      ...limits,
+      acquisitionS: limits.acquisitionS + ACQUISITION_ALLOWANCE_S,
+      guardS: limits.guardS + EDGE_ALLOWANCE_S,
+      maxHeatingS: least(limits.maxHeatingS, meltS),
+    },
   });
   return { ...planned, dwell: chosen ? plannedDwell(profile, chosen) : null, refusal: null };
 }

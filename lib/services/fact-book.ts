@@ -38,8 +38,8 @@ export interface FactBook {
   readonly asked: Rows<typeof askedAndAnswered>;
 }
 
-/** What is held this long around the passes still matters to them, ms. */
-const MARGIN_MS = 3_600_000;
+/** Room for what a dwell may reach beyond its pass, ms; slew and cool-down of the stations come on top. */
+const MARGIN_MS = 600_000;
 
 /**
  * Loads everything the rules need for these passes, in a fixed number of queries. Requests and answers
@@ -58,7 +58,7 @@ export async function loadFactBook(
   const newest = await newestFragmentSets(q, fragmentIds);
   const crossings = await crossingRows(q, passIds);
   const gapObjects = await protectedRowsById(q, unique(rows.flatMap((row) => row.screeningGaps)));
-  const live = await liveEngagements(q, rows, stationIds, fragmentIds);
+  const live = await liveEngagements(q, rows, stationRows, fragmentIds);
   const firings = await lastFirings(q, fragmentIds);
   const shown = await passEngagementRows(q, passIds);
   const askedIds = shown.map((engagement) => engagement.id);
@@ -84,20 +84,22 @@ function unique(values: readonly string[]): string[] {
 async function liveEngagements(
   q: Queryable,
   rows: readonly PassRow[],
-  stationIds: readonly string[],
+  stationRows: Rows<typeof stationsWithLaser>,
   fragmentIds: readonly string[],
 ): Promise<EngagementFacts[]> {
   if (rows.length === 0) return [];
+  const holds = stationRows.map(({ station }) => 1000 * (station.slewS + station.coolDownS));
+  const marginMs = MARGIN_MS + Math.max(...holds);
   let [fromMs, toMs] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
   for (const row of rows) {
     fromMs = Math.min(fromMs, row.riseAt.getTime());
     toMs = Math.max(toMs, row.setAt.getTime());
   }
   const scope = {
-    stationIds,
+    stationIds: stationRows.map(({ station }) => station.id),
     fragmentIds,
-    from: new Date(fromMs - MARGIN_MS),
-    to: new Date(toMs + MARGIN_MS),
+    from: new Date(fromMs - marginMs),
+    to: new Date(toMs + marginMs),
   };
   return (await liveEngagementRows(q, scope)).map(engagementFacts);
 }
