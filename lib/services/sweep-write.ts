@@ -129,7 +129,7 @@ async function askForRescreening(tx: Transaction, fragmentId: string): Promise<v
     "rescreen-engagement",
     engagementIds.map((engagementId) => ({
       payload: { engagementId },
-      jobKey: `rescreen-engagement:${engagementId}`,
+      jobKey: `rescreen-engagement ${engagementId}`,
     })),
   );
 }

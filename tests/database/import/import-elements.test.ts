@@ -70,7 +70,7 @@ describe("importElements", () => {
     expect(report.rejected[0]?.column).toBe(69);
     expect(report.rejected[0]?.message).toMatch(/checksum/i);
     expect(report.created.map(({ catalogNumber }) => catalogNumber)).toEqual([numberOf(0), numberOf(2)]);
-    expect(await counts()).toEqual({ sets: 2, imports: 1, fragments: 2, guarded: 0, sweeps: 1, jobs: 1 });
+    expect(await counts()).toEqual({ sets: 2, imports: 1, fragments: 2, guarded: 0, sweeps: 1, jobs: 2 });
     expect(await ledgerActions()).toBe(before + 1);
     const { rows } = await database().execute(sql`
       select accepted_count, duplicate_count, older_count, jsonb_array_length(rejected) as rejected, source
