@@ -1,0 +1,263 @@
+import { sql } from "drizzle-orm";
+import { type AddressObject, type ParsedMail, simpleParser } from "mailparser";
+import { SMTPServer } from "smtp-server";
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { database } from "@/db/client";
+import { inTransaction } from "@/db/transaction";
+import { bookEngagement } from "@/lib/services/book-engagement";
+import { moveEngagement } from "@/lib/services/move-engagement";
+import { raiseNotices } from "@/lib/services/raise-notices";
+import { scrubEngagement } from "@/lib/services/scrub-engagement";
+import { MAX_ATTEMPTS, sendNotice } from "@/lib/services/send-notice";
+import { ownDatabase } from "../support";
+import { NOW } from "../world";
+import { bookIn, rowsOf } from "./asks";
+import { dwellIn, makeScene, type Scene } from "./scene";
+
+/** How the server answers the recipient of the next mail. */
+let answer: "take" | "refuse for now" | "refuse for good" | "drop after the text" = "take";
+let inbox: { mail: ParsedMail; raw: string }[] = [];
+
+const server = new SMTPServer({
+  authOptional: true,
+  disabledCommands: ["STARTTLS"],
+  onRcptTo(_address, _session, callback) {
+    if (answer === "take" || answer === "drop after the text") return callback();
+    const error: Error & { responseCode?: number } = new Error("mailbox says no");
+    error.responseCode = answer === "refuse for good" ? 550 : 451;
+    callback(error);
+  },
+  onData(stream, _session, callback) {
+    const chunks: Buffer[] = [];
+    stream.on("data", (chunk: Buffer) => chunks.push(chunk));
+    stream.on("end", async () => {
+      const raw = Buffer.concat(chunks).toString("utf8");
+      inbox.push({ raw, mail: await simpleParser(raw) });
+      if (answer !== "drop after the text") return callback();
+      // The text is with the server, its word never reaches us.
+      answer = "take";
+      for (const connection of server.connections as Set<{ _socket: { destroy(): void } }>)
+        connection._socket.destroy();
+    });
+  },
+});
+
+ownDatabase();
+let scene: Scene;
+beforeAll(async () => {
+  await new Promise<void>((resolve) => server.listen(0, "127.0.0.1", resolve));
+  const address = server.server.address();
+  if (address === null || typeof address === "string") throw new Error("the mail server has no port");
+  process.env.SMTP_URL = `smtp://127.0.0.1:${address.port}`;
+  scene = await makeScene();
+});
+afterAll(() => new Promise<void>((resolve) => server.close(() => resolve())));
+beforeEach(() => {
+  answer = "take";
+  inbox = [];
+});
+
+afterEach(async () => {
+  for (const { id } of await rowsOf(sql`select id from engagements where state = 'proposed'`)) {
+    await scrubEngagement(scene.planner, String(id), { reason: "test over" }, NOW);
+  }
+  await database().execute(sql`delete from graphile_worker._private_jobs`);
+});
+
+/** Runs every waiting job of sending, as a worker would; gives how many failed. */
+async function runJobs(): Promise<number> {
+  const jobs = await rowsOf(sql`
+    select j.id, j.payload from graphile_worker._private_jobs j
+    join graphile_worker._private_tasks t on t.id = j.task_id where t.identifier = 'send-notice' order by j.id`);
+  let failed = 0;
+  for (const { id, payload } of jobs) {
+    try {
+      await sendNotice((payload as { noticeId: string }).noticeId);
+      await database().execute(sql`delete from graphile_worker._private_jobs where id = ${id}`);
+    } catch {
+      failed += 1;
+    }
+  }
+  return failed;
+}
+
+const mailsTo = (email: string) =>
+  inbox.filter(({ mail }) => (mail.to as AddressObject).value.some(({ address }) => address === email));
+
+/** A property of the calendar part, after undoing the folding of RFC 5545. */
+function property(mail: ParsedMail, name: string): string | undefined {
+  const part = mail.attachments.find(({ contentType }) => contentType.startsWith("text/calendar"));
+  const lines = part?.content.toString("utf8").replaceAll("\r\n ", "").split("\r\n");
+  return lines
+    ?.find((line) => line.startsWith(`${name}:`) || line.startsWith(`${name};`))
+    ?.replace(/^[^:]*:/, "");
+}
+
+async function noticesOfEngagement(id: string) {
+  return rowsOf(sql`
+    select kind, delivery, attempts, last_error, message_id from notices where engagement_id = ${id}
+      and authority_id = ${scene.clearing.id} order by sequence`);
+}
+
+describe("mail about an engagement", () => {
+  it("goes out once per authority: text, HTML and calendar as alternatives, the same UID, a rising SEQUENCE", async () => {
+    const body = await bookIn(scene);
+    expect(await runJobs()).toBe(0);
+    await moveEngagement(scene.planner, body.id, { ...dwellIn(scene.pass, 10), version: body.version }, NOW);
+    expect(await runJobs()).toBe(0);
+    await scrubEngagement(scene.planner, body.id, { reason: "dome stuck" }, NOW);
+    expect(await runJobs()).toBe(0);
+    const mails = mailsTo(scene.clearing.email);
+    expect(mails.map(({ mail }) => property(mail, "METHOD"))).toEqual(["REQUEST", "REQUEST", "CANCEL"]);
+    expect(mails.map(({ mail }) => property(mail, "UID"))).toEqual(
+      Array(3).fill(`${body.id}@dwellbook.invalid`),
+    );
+    expect(mails.map(({ mail }) => property(mail, "SEQUENCE"))).toEqual(["0", "1", "2"]);
+    expect(mails.map(({ mail }) => property(mail, "STATUS"))).toEqual([
+      "TENTATIVE",
+      "TENTATIVE",
+      "CANCELLED",
+    ]);
+    const stamp = (iso: string) => iso.replace(/[-:]|\.000/g, "");
+    expect(mails.map(({ mail }) => property(mail, "DTSTART"))).toEqual([
+      stamp(body.from),
+      stamp(dwellIn(scene.pass, 10).from),
+      stamp(dwellIn(scene.pass, 10).from),
+    ]);
+    expect(mailsTo(scene.airUnit.email)).toHaveLength(3);
+    expect(inbox).toHaveLength(6);
+  });
+
+  it("has the parts, headers and link that the notice was given", async () => {
+    const body = await bookIn(scene);
+    await runJobs();
+    const [received] = mailsTo(scene.clearing.email);
+    if (!received) throw new Error("no mail has come");
+    const { mail, raw } = received;
+    const [row] = await rowsOf(sql`
+      select id, message_id, subject, text_body, html_body from notices
+      where engagement_id = ${body.id} and authority_id = ${scene.clearing.id}`);
+    expect(mail.messageId).toBe(row?.message_id);
+    expect(mail.messageId).toBe(`<${row?.id}@dwellbook.invalid>`);
+    expect(mail.headers.get("x-notice-id")).toBe(row?.id);
+    expect(mail.subject).toBe(row?.subject);
+    expect(mail.from?.value[0]?.address).toBe("book@dwellbook.invalid");
+    expect(mail.text?.trim()).toBe(String(row?.text_body).trim());
+    expect(String(mail.html).trim()).toBe(String(row?.html_body).trim());
+    expect(raw).toMatch(/Content-Type: multipart\/alternative/);
+    expect(raw).toMatch(/Content-Type: text\/calendar; charset=utf-8; method=REQUEST/i);
+    expect(mail.text).toMatch(/http:\/\/127\.0\.0\.1:3000\/answer\/[\w-]+\.[\w-]+/);
+    expect(property(mail, "ATTENDEE")?.toLowerCase()).toBe(`mailto:${scene.clearing.email}`);
+    expect(property(mail, "ORGANIZER")?.toLowerCase()).toBe("mailto:book@dwellbook.invalid");
+  });
+
+  it("is tried again while the server refuses for now, and then goes out with the same Message-ID", async () => {
+    const body = await bookIn(scene);
+    answer = "refuse for now";
+    expect(await runJobs()).toBe(2);
+    const [waiting] = await noticesOfEngagement(body.id);
+    expect(waiting).toMatchObject({ delivery: "queued", attempts: 1 });
+    expect(String(waiting?.last_error)).toContain("mailbox says no");
+    answer = "take";
+    expect(await runJobs()).toBe(0);
+    expect(await noticesOfEngagement(body.id)).toMatchObject([
+      { delivery: "sent", attempts: 2, last_error: null },
+    ]);
+    expect(mailsTo(scene.clearing.email).map(({ mail }) => mail.messageId)).toEqual([waiting?.message_id]);
+  });
+
+  it("keeps its order: a cancellation waits for the request before it", async () => {
+    const body = await bookIn(scene);
+    answer = "refuse for now";
+    await runJobs();
+    await scrubEngagement(scene.planner, body.id, { reason: "cloud" }, NOW);
+    answer = "take";
+    const [cancellation] = await rowsOf(sql`
+      select id from notices where engagement_id = ${body.id} and authority_id = ${scene.clearing.id} and kind = 'cancellation'`);
+    await sendNotice(String(cancellation?.id));
+    expect(mailsTo(scene.clearing.email).map(({ mail }) => property(mail, "METHOD"))).toEqual([
+      "REQUEST",
+      "CANCEL",
+    ]);
+    await runJobs();
+    expect(mailsTo(scene.clearing.email)).toHaveLength(2);
+  });
+
+  it("counts as failed, with the reason and a ledger row, once the server refuses for good", async () => {
+    const body = await bookIn(scene);
+    answer = "refuse for good";
+    expect(await runJobs()).toBe(0);
+    expect(await noticesOfEngagement(body.id)).toMatchObject([{ delivery: "failed", attempts: 1 }]);
+    const [row] = await rowsOf(sql`
+      select actor_name, reason from ledger where subject_id = ${body.id} and action = 'could not deliver request to Tessel Clearing Desk'`);
+    expect(row?.actor_name).toBe("the book");
+    expect(row?.reason).toContain("mailbox says no");
+  });
+
+  it("counts as failed after the last attempt, and is given up then", async () => {
+    const body = await bookIn(scene);
+    answer = "refuse for now";
+    for (let attempt = 1; attempt < MAX_ATTEMPTS; attempt++) expect(await runJobs()).toBe(2);
+    expect(await runJobs()).toBe(0);
+    expect(await noticesOfEngagement(body.id)).toMatchObject([
+      { delivery: "failed", attempts: MAX_ATTEMPTS },
+    ]);
+  });
+
+  it("goes out once when several workers try at the same moment", async () => {
+    const body = await bookIn(scene);
+    const ids = await rowsOf(sql`select id from notices where engagement_id = ${body.id}`);
+    await Promise.all([...ids, ...ids, ...ids].map(({ id }) => sendNotice(String(id))));
+    expect(inbox).toHaveLength(2);
+    await runJobs();
+    expect(inbox).toHaveLength(2);
+  });
+
+  it("repeats only under the same Message-ID when the server's word is lost after the text", async () => {
+    const body = await bookIn(scene);
+    answer = "drop after the text";
+    await runJobs();
+    await runJobs();
+    const mails = mailsTo(scene.airUnit.email);
+    const all = [...mails, ...mailsTo(scene.clearing.email)];
+    expect(all).toHaveLength(3);
+    expect(new Set(all.map(({ mail }) => mail.messageId)).size).toBe(2);
+    expect(await noticesOfEngagement(body.id)).toMatchObject([{ delivery: "sent" }]);
+  });
+});
+
+describe("notices and jobs", () => {
+  const counts = async () =>
+    (
+      await rowsOf(sql`
+      select (select count(*)::int from notices) as notices,
+        (select count(*)::int from graphile_worker._private_jobs) as jobs`)
+    )[0];
+
+  it("are never there when the transaction that raised them is not", async () => {
+    const body = await bookIn(scene);
+    const before = await counts();
+    const work = inTransaction(async (tx) => {
+      await tx.execute(sql`update engagements set calendar_sequence = 7 where id = ${body.id}`);
+      const members = [{ authority: scene.clearing, kind: "revised request", because: "of a test" }] as const;
+      await raiseNotices(tx, { engagementId: body.id, members, nowMs: NOW });
+      const [inside] = (await tx.execute(sql`select count(*)::int as n from graphile_worker._private_jobs`))
+        .rows;
+      expect(inside?.n).toBe(Number(before?.jobs) + 1);
+      throw new Error("undo");
+    });
+    await expect(work).rejects.toThrow("undo");
+    expect(await counts()).toEqual(before);
+  });
+
+  it("are not there for a booking that was refused", async () => {
+    const before = await counts();
+    const booked = bookEngagement(
+      scene.planner,
+      { passId: scene.pass.id, ...dwellIn(scene.pass, 0, 1) },
+      NOW,
+    );
+    await expect(booked).rejects.toThrow("rules do not allow");
+    expect(await counts()).toEqual(before);
+  });
+});
