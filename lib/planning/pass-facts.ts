@@ -108,6 +108,8 @@ export interface AnswerFacts {
 /** The engagement that is being judged: whom it has asked, and what they said. */
 export interface OwnFacts {
   readonly engagementId: string;
+  /** What the requests and answers are about; elsewhere in the pass they say nothing. */
+  readonly dwell: Interval;
   readonly requestedOf: ReadonlySet<string>;
   readonly answers: readonly AnswerFacts[];
 }

@@ -74,7 +74,6 @@ export async function judgeDwell(
   const facts = factsOf(book, row, { nowMs: args.nowMs, dwell, ownEngagementId: args.engagementId });
   const geometry = measureRow(row, scene, orbit);
   const whole = closuresOf(geometry, facts);
-  const closures = cutClosures(whole, dwell);
   const figured = figuresOf(row, scene);
   const figures = figured.ok ? figured.figures : null;
   const worked = workedEffect(figured, orbit && { orbit, frame: scene.map.frame }, dwell);
@@ -84,10 +83,7 @@ export async function judgeDwell(
     fragmentId: row.fragmentId,
     elementSetId: row.elementSetId,
     laserSettingId: figures?.laserSettingId ?? row.laserSettingId,
-    closures,
-    closed: withVerdict(closures, "closed"),
-    pending: withVerdict(closures, "pending"),
-    notChecked: withVerdict(closures, "not checked"),
+    ...byVerdict(cutClosures(whole, dwell)),
     limits: brokenLimits({
       dwell,
       riseMs: geometry.riseMs,
@@ -99,6 +95,15 @@ export async function judgeDwell(
     effect: worked.ok ? worked.effect : null,
     effectRefusal: worked.ok ? null : worked.reason,
     concerned: concernedAuthorities(book, geometry, facts, dwell),
+  };
+}
+
+function byVerdict(closures: Closure[]): Pick<Judgement, "closures" | "closed" | "pending" | "notChecked"> {
+  return {
+    closures,
+    closed: withVerdict(closures, "closed"),
+    pending: withVerdict(closures, "pending"),
+    notChecked: withVerdict(closures, "not checked"),
   };
 }
 

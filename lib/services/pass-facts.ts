@@ -10,7 +10,7 @@ import type {
   ScreeningFacts,
 } from "@/lib/planning/pass-facts";
 import type { FactBook } from "./fact-book";
-import { answerFacts } from "./fact-rows";
+import { answerFacts, intervalOf } from "./fact-rows";
 import type { StationScene } from "./station-scene";
 
 /** What is asked about the pass: when, for which dwell, and on behalf of which engagement. */
@@ -20,6 +20,9 @@ export interface Question {
   /** Its own hold, requests and answers count as its own; it must be in the book. */
   readonly ownEngagementId: string | null;
 }
+
+/** For an engagement whose dwell isn't known: its answers help nowhere. */
+const NOWHERE: Interval = { fromMs: 0, toMs: 0 };
 
 /** The facts of one pass for the rules, from what was loaded. Throws when its station wasn't. */
 export function factsOf(book: FactBook, row: PassRow, question: Question): PassFacts {
@@ -44,7 +47,7 @@ export function factsOf(book: FactBook, row: PassRow, question: Question): PassF
     stationAuthorityIds: scene.authorityIds,
     engagements: near(book, row, question.dwell, scene),
     firings: firingFacts(book, row.fragmentId),
-    own: ownFacts(book, question.ownEngagementId),
+    own: ownFacts(book, row, question),
     dwell: question.dwell,
   };
 }
@@ -105,11 +108,15 @@ function firingFacts(book: FactBook, fragmentId: string): FiringFacts[] {
   return [{ engagementNumber: firing.number, outcome, closedMs: firing.closedAt.getTime() }];
 }
 
-function ownFacts(book: FactBook, engagementId: string | null): OwnFacts | null {
+function ownFacts(book: FactBook, row: PassRow, question: Question): OwnFacts | null {
+  const engagementId = question.ownEngagementId;
   if (engagementId === null) return null;
+  const shown = book.passEngagements.get(row.id);
+  const booked = shown?.id === engagementId ? intervalOf(shown.dwellFrom, shown.dwellTo) : null;
   const { requests, answers } = book.asked;
   return {
     engagementId,
+    dwell: question.dwell ?? booked ?? NOWHERE,
     requestedOf: new Set(requests.filter((r) => r.engagementId === engagementId).map((r) => r.authorityId)),
     answers: answers.filter((answer) => answer.engagementId === engagementId).map(answerFacts),
   };

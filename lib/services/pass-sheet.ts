@@ -10,7 +10,8 @@ import type { Interval } from "@/lib/planning/interval";
 import { buildProfile } from "@/lib/planning/profile";
 import { isoOf } from "./closure-body";
 import { type FactBook, loadFactBook } from "./fact-book";
-import { concernedAuthorities } from "./judge-dwell";
+import { intervalOf } from "./fact-rows";
+import { type ConcernedAuthority, concernedAuthorities } from "./judge-dwell";
 import { passBody } from "./pass-body";
 import { crossingBodies, elementSetBody, laserBody, stationBody } from "./pass-sheet-parts";
 import { AIM, orbitOrNull } from "./pass-work";
@@ -43,45 +44,35 @@ async function sheetOf(
   row: PassRow,
   offered: OfferedPass,
 ): Promise<PassSheetBody> {
-  const { reading } = offered;
-  const { scene, figured, facts, geometry } = reading;
+  const { scene, figured, facts, geometry, engagement } = offered.reading;
   const orbit = orbitOrNull((await elementsByRow(q, [row])).get(row.elementSetId));
-  const figures = figured.ok ? figured.figures : null;
-  const profile = orbit && figures ? profileOf(offered, orbit) : null;
-  const booked = reading.engagement
-    ? { fromMs: reading.engagement.dwellFrom.getTime(), toMs: reading.engagement.dwellTo.getTime() }
-    : null;
-  const dwell = booked ?? offered.offer.dwell;
+  const profile = orbit && profileOf(offered, orbit);
+  const dwell = engagement ? intervalOf(engagement.dwellFrom, engagement.dwellTo) : offered.offer.dwell;
+  const { riseAzimuthDeg, culminationAzimuthDeg, setAzimuthDeg, underWayAtFrom, underWayAtTo } = row;
   return {
     ...passBody(offered),
     station: stationBody(scene),
     laser: laserBody(scene),
-    riseAzimuthDeg: row.riseAzimuthDeg,
-    culminationAzimuthDeg: row.culminationAzimuthDeg,
-    setAzimuthDeg: row.setAzimuthDeg,
-    underWayAtFrom: row.underWayAtFrom,
-    underWayAtTo: row.underWayAtTo,
+    riseAzimuthDeg,
+    culminationAzimuthDeg,
+    setAzimuthDeg,
+    underWayAtFrom,
+    underWayAtTo,
     elementSet: elementSetBody(row),
     aim: profile?.aim ?? AIM,
     aimUnit: profile?.aimUnit ?? "",
     samples: profile?.samples ?? [],
-    estimate: reading.engagement
-      ? bookedEstimate(reading.engagement)
-      : dwell && orbit
-        ? estimateOf(offered, orbit, dwell)
-        : null,
-    concerned: concernedAuthorities(book, geometry, facts, dwell).map(
-      ({ authorityId, name, kind, because, leadTimeMin }) => ({
-        authorityId,
-        name,
-        kind,
-        because,
-        leadTimeMin,
-      }),
-    ),
-    assumptions: figures ? assumptionsOf(figures.laser, figures.body, row.bodySource) : [],
+    estimate: engagement ? bookedEstimate(engagement) : orbit && dwell && estimateOf(offered, orbit, dwell),
+    concerned: concernedBodies(concernedAuthorities(book, geometry, facts, dwell)),
+    assumptions: figured.ok ? assumptionsOf(figured.figures.laser, figured.figures.body, row.bodySource) : [],
     crossings: crossingBodies(book, row),
   };
+}
+
+function concernedBodies(concerned: readonly ConcernedAuthority[]): PassSheetBody["concerned"] {
+  return concerned.map(({ authorityId, name, kind, because, leadTimeMin }) => {
+    return { authorityId, name, kind, because, leadTimeMin };
+  });
 }
 
 /** The worth curve and the samples of the whole pass; null where the model refuses it. */

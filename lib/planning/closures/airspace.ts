@@ -1,6 +1,6 @@
 import type { Closure } from "../closure";
 import { answerOf, volumeHours } from "../concerned";
-import type { Interval } from "../interval";
+import { type Interval, subtract } from "../interval";
 import type { PassFacts, VolumeFacts } from "../pass-facts";
 import { timeWords } from "../words";
 import { type Rule, wholePass } from "./rule";
@@ -27,7 +27,9 @@ export const airspace: Rule = (pass, facts) => {
     if (!volume) continue;
     const { active, unknown } = volumeHours(volume, spans);
     const verdict = activeVerdict(volume, facts);
-    if (verdict) closures.push(...active.map((span) => ({ ...span, ...verdict })));
+    const lifted = liftedSpans(volume, facts);
+    const left = active.flatMap((span) => subtract(span, lifted));
+    closures.push(...left.map((span) => ({ ...span, ...verdict })));
     closures.push(...unknown.map((span) => unknownHours(volume, span)));
   }
   return closures;
@@ -40,13 +42,18 @@ function common(volume: VolumeFacts): Pick<Closure, "rule" | "label" | "input" |
   return { rule: "airspace", label: volume.name, input, overridable: false };
 }
 
-/** What an active volume means; null once its authority has said no objection. */
-function activeVerdict(volume: VolumeFacts, facts: PassFacts): Finding | null {
+/** The dwell that the volume's authority has said no objection to. */
+function liftedSpans(volume: VolumeFacts, { own }: PassFacts): Interval[] {
+  if (!volume.liftable || volume.authorityId === null || !own) return [];
+  const answer = answerOf(own, volume.authorityId);
+  return answer && answer.outcome !== "objection" ? [own.dwell] : [];
+}
+
+/** What an active volume means as long as nobody has lifted it. */
+function activeVerdict(volume: VolumeFacts, facts: PassFacts): Finding {
   const where = `The beam runs through ${volume.name} (${volume.floorText} to ${volume.ceilingText}) while it is active`;
   const authority = facts.authorities.find((known) => known.id === volume.authorityId);
   if (volume.liftable && authority) {
-    const answer = answerOf(facts.own, authority.id);
-    if (answer && answer.outcome !== "objection") return null;
     return {
       ...common(volume),
       verdict: "pending",

@@ -1,6 +1,6 @@
 import type { Closure } from "../closure";
 import { answerOf, type Concerned, concernedBy } from "../concerned";
-import { type Interval, intersect } from "../interval";
+import { type Interval, intersect, subtract } from "../interval";
 import type { AnswerFacts, PassFacts } from "../pass-facts";
 import type { PassGeometry } from "../pass-geometry";
 import { spanWords, timeWords } from "../words";
@@ -13,7 +13,7 @@ import type { Rule } from "./rule";
 export const authorityAnswers: Rule = (pass, facts) =>
   concernedBy(pass, facts, facts.dwell).flatMap((concerned) => {
     const answer = answerOf(facts.own, concerned.authority.id);
-    if (answer) return answered(concerned, answer);
+    if (answer && facts.own) return answered(concerned, answer, facts.own.dwell);
     return [...tooLate(concerned, pass, facts), ...awaited(concerned, facts)];
   });
 
@@ -23,11 +23,28 @@ function common(concerned: Concerned): Pick<Closure, "rule" | "input" | "overrid
   return { rule: "authority answers", input, overridable: false };
 }
 
-function answered(concerned: Concerned, answer: AnswerFacts): Closure[] {
-  if (answer.outcome !== "objection") return [];
+/** An answer is about the dwell that was asked for; for other seconds the authority must be asked again. */
+function answered(concerned: Concerned, answer: AnswerFacts, dwell: Interval): Closure[] {
+  const { name } = concerned.authority;
+  const elsewhere = concerned.spans.flatMap((span) => subtract(span, [dwell]));
+  const again = elsewhere.map(
+    (span): Closure => ({
+      ...span,
+      ...common(concerned),
+      verdict: "pending",
+      cause: `${name} has answered for another dwell and must be asked again.`,
+      label: `answer of ${name}`,
+      liftedBy: `no objection from ${name}`,
+    }),
+  );
+  return answer.outcome === "objection" ? [...objected(concerned, answer, dwell), ...again] : again;
+}
+
+function objected(concerned: Concerned, answer: AnswerFacts, dwell: Interval): Closure[] {
   const { name } = concerned.authority;
   const reasons = answer.reasons ? `: ${answer.reasons}` : ".";
-  return concerned.spans.map((span) => ({
+  const within = concerned.spans.map((span) => intersect(span, dwell)).filter((span) => span !== null);
+  return within.map((span) => ({
     ...span,
     ...common(concerned),
     verdict: "closed",

@@ -17,8 +17,8 @@ const VOLUME: VolumeFacts = {
 };
 const INSIDE = { ...PASS, airspaceKey: "v-1:5", volumes: [{ volumeId: "v-1", spans: [span(100, 200)] }] };
 
-function judged(volume: Partial<VolumeFacts>, answers: AnswerFacts[] | null = null) {
-  const own = answers && { engagementId: "e-1", requestedOf: new Set(["a-1"]), answers };
+function judged(volume: Partial<VolumeFacts>, answers: AnswerFacts[] | null = null, dwell = span(90, 160)) {
+  const own = answers && { engagementId: "e-1", dwell, requestedOf: new Set(["a-1"]), answers };
   const facts = { ...OPEN, airspaceKey: "v-1:5", authorities: [UNIT], own };
   return airspace(INSIDE, { ...facts, volumes: [{ ...VOLUME, ...volume }] });
 }
@@ -46,6 +46,13 @@ describe("airspace", () => {
     expect(judged({}, [answer("no objection with conditions")])).toEqual([]);
     expect(brief(judged({}, [answer("objection")]))).toEqual([["pending", 100, 150]]);
     expect(brief(judged({}, []))).toEqual([["pending", 100, 150]]);
+  });
+
+  it("stays pending for seconds that the answer was not about", () => {
+    expect(brief(judged({}, [answer("no objection")], span(110, 130)))).toEqual([
+      ["pending", 100, 110],
+      ["pending", 130, 150],
+    ]);
   });
 
   it("is closed where the volume can't be lifted, or nobody is named who could", () => {

@@ -31,7 +31,7 @@ function answer(authorityId: string, outcome: AnswerFacts["outcome"], reasons: s
 }
 
 function asked(ids: string[], answers: AnswerFacts[]): PassFacts["own"] {
-  return { engagementId: "e-1", requestedOf: new Set(ids), answers };
+  return { engagementId: "e-1", dwell: span(60, 120), requestedOf: new Set(ids), answers };
 }
 
 describe("authority answers", () => {
@@ -91,6 +91,21 @@ describe("authority answers", () => {
       const facts = { ...FACTS, own: asked(["desk"], [answer("desk", outcome)]), dwell: span(60, 120) };
       expect(authorityAnswers(PASS, facts)).toEqual([]);
     }
+  });
+
+  it("says nothing about other seconds of the pass than those that were asked about", () => {
+    const whole = { ...FACTS, dwell: null };
+    const content = asked(["desk"], [answer("desk", "no objection")]);
+    expect(brief(authorityAnswers(PASS, { ...whole, own: content }))).toEqual([
+      ["pending", 0, 60],
+      ["pending", 120, 600],
+    ]);
+    const against = asked(["desk"], [answer("desk", "objection")]);
+    expect(brief(authorityAnswers(PASS, { ...whole, own: against }))).toEqual([
+      ["closed", 60, 120],
+      ["pending", 0, 60],
+      ["pending", 120, 600],
+    ]);
   });
 
   it("is closed by an objection, with its reasons", () => {

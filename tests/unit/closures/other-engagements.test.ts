@@ -43,7 +43,7 @@ describe("other engagements", () => {
   });
 
   it("does not stand in its own way", () => {
-    const own = { engagementId: "e-2", requestedOf: new Set<string>(), answers: [] };
+    const own = { engagementId: "e-2", dwell: OTHER.dwell, requestedOf: new Set<string>(), answers: [] };
     expect(closuresOf(PASS, { ...OPEN, engagements: [OTHER], own })).toEqual([]);
   });
 });
