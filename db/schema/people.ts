@@ -19,9 +19,14 @@ export const people = pgTable(
     /** Raised to end all of the person's sessions at once. */
     sessionVersion: integer("session_version").notNull().default(1),
     active: boolean("active").notNull().default(true),
+    /** Hash of the secret in the person's calendar address; null while there is none. */
+    calendarSecretHash: text("calendar_secret_hash"),
     createdAt: instant("created_at").notNull().defaultNow(),
   },
-  (t) => [uniqueIndex("people_email_key").on(t.email)],
+  (t) => [
+    uniqueIndex("people_email_key").on(t.email),
+    uniqueIndex("people_calendar_secret_key").on(t.calendarSecretHash),
+  ],
 );
 
 /** Personal access tokens; only the hash is kept. */
