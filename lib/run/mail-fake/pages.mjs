@@ -96,8 +96,8 @@ export function mailPage({ mail, newer, older, bookUrl }) {
     : "";
   const body = `<p><a href="/">All mail</a></p><h1>${escapeHtml(subjectOf(mail))}</h1>${tagsOf(mail)}
 <dl class="facts sheet">${fact("From", escapeHtml(mail.from))}${fact("To", escapeHtml(mail.to.join(", ")))}${fact("Received", `<span class="n">${utc(mail.receivedAt)}</span>`)}${fact("Message-ID", `<span class="n">${escapeHtml(mail.messageId)}</span>`)}</dl>
-<h2>Text part</h2><div class="sheet"><pre>${mail.text.trim() === "" ? "(empty)" : withLinks(mail.text)}</pre></div>
-${html}${calendar}${attachmentsPart(mail)}${headersPart(mail)}
+${html}<h2>Text part</h2><div class="sheet"><pre>${mail.text.trim() === "" ? "(empty)" : withLinks(mail.text)}</pre></div>
+${calendar}${attachmentsPart(mail)}${headersPart(mail)}
 <nav class="turn" aria-label="Other mails">${turn(newer, "Newer mail")}${turn(older, "Older mail")}</nav>`;
   return frame(subjectOf(mail), bookUrl, body);
 }

@@ -41,7 +41,7 @@ ol.mails .to{color:var(--quiet);font-size:14.5px;overflow-wrap:anywhere}
 .turn{display:flex;justify-content:space-between;gap:18px;margin-top:16px}
 .facts{margin:14px 0 0;padding:12px 16px;display:grid;grid-template-columns:110px 1fr;gap:4px 14px}
 .facts dt{color:var(--quiet);font-size:14.5px}.facts dd{margin:0;overflow-wrap:anywhere}
-iframe{display:block;width:100%;height:min(60vh,480px);border:1px solid var(--line);border-radius:3px;background:#fff;resize:vertical;overflow:auto}
+iframe{display:block;width:100%;height:min(72vh,640px);border:1px solid var(--line);border-radius:3px;background:#fff;resize:vertical;overflow:auto}
 pre{margin:0;padding:14px 16px;white-space:pre-wrap;overflow-wrap:anywhere;font:14.5px/1.5 Figures,ui-monospace,monospace}
 ul.files{margin:0;padding:6px 16px;list-style:none}ul.files li{padding:6px 0;overflow-wrap:anywhere}
 summary{cursor:pointer;padding:10px 16px;font-weight:620}
