@@ -53,6 +53,22 @@ export async function readChunk(
   return row ?? null;
 }
 
+/** Which of these fragments a later sweep takes on as well, at least as far ahead, and has not given up. */
+export async function takenOnLater(
+  q: Queryable,
+  sweep: Pick<SweepRow, "id" | "startedAt" | "toAt">,
+  fragmentIds: readonly string[],
+): Promise<Set<string>> {
+  const { rows } = await q.execute<{ id: string }>(sql`
+    select distinct each.id from sweeps s
+      join sweep_chunks c on c.sweep_id = s.id and c.state <> 'failed'
+      cross join lateral jsonb_array_elements_text(c.fragment_ids) as each(id)
+    where s.state <> 'cancelled' and s.to_at >= ${sweep.toAt.toISOString()}::timestamptz
+      and (s.started_at, s.id) > (${sweep.startedAt.toISOString()}::timestamptz, ${sweep.id}::uuid)
+      and each.id = any(${sql.param([...fragmentIds])}::text[])`);
+  return new Set(rows.map((row) => row.id));
+}
+
 /** The sweep's row under lock: whoever ends a chunk waits here, so that the last one sees all others. */
 export async function lockSweep(q: Queryable, sweepId: string): Promise<SweepRow | null> {
   const [row] = await q.select().from(sweeps).where(eq(sweeps.id, sweepId)).for("update");

@@ -1,3 +1,4 @@
+import { constants, setPriority } from "node:os";
 import { closePool, database } from "@/db/client";
 import { addJob } from "@/lib/services/queue";
 import { TASKS } from "./tasks";
@@ -9,6 +10,8 @@ const GRACE_MS = 1200;
 
 /** One worker process: runs jobs until a signal, then ends without leaving a locked job behind. */
 async function main(): Promise<void> {
+  // A sweep may keep every core busy for minutes: the web server goes first.
+  setPriority(constants.priority.PRIORITY_BELOW_NORMAL);
   const worker = await startWorker(TASKS);
   console.log(`Worker ${worker.poolId} takes jobs.`);
   // After a longer stop the week has a gap at its end: the clock's next round is up to an hour away.

@@ -64,6 +64,11 @@ async function workOff(sweepId: string, nowMs = now): Promise<void> {
   for (const id of await chunksOf(sweepId)) await sweepChunk(id, nowMs);
 }
 
+async function passCounts(sweepId: string): Promise<Map<string, number | null>> {
+  const rows = await database().select().from(sweepChunks).where(eq(sweepChunks.sweepId, sweepId));
+  return new Map(rows.flatMap(({ fragmentIds: ids, passCount }) => ids.map((id) => [id, passCount])));
+}
+
 async function passesOf(fragmentId: string) {
   return database().select().from(passes).where(eq(passes.fragmentId, fragmentId)).orderBy(passes.riseAt);
 }
@@ -187,6 +192,21 @@ describe("a chunk", () => {
     const after = await readSweep(planner, sweepId);
     expect(after).toMatchObject({ state: "cancelled", fragments: { total: 2, done: 0 } });
     await expect(cancelSweep(planner, sweepId, now)).rejects.toMatchObject({ status: 409 });
+  });
+
+  it("leaves a fragment to a later sweep that takes it on too, unless that one is cancelled", async () => {
+    const earlier = await sweep("all");
+    const later = await sweep(fragmentIds.slice(0, 1));
+    await workOff(earlier);
+    const counts = await passCounts(earlier);
+    expect(counts.get(fragmentIds[0] ?? "")).toBe(0);
+    expect(counts.get(fragmentIds[1] ?? "")).toBeGreaterThan(10);
+    await workOff(later);
+    expect((await passCounts(later)).get(fragmentIds[0] ?? "")).toBeGreaterThan(10);
+    const third = await sweep("all");
+    await cancelSweep(planner, await sweep("all"), now);
+    await workOff(third);
+    expect((await passCounts(third)).get(fragmentIds[0] ?? "")).toBeGreaterThan(10);
   });
 
   it("says in one sentence what it can't work out", async () => {
