@@ -3,6 +3,7 @@ import type { ReactNode } from "react";
 export interface Column<Row> {
   /** The column's head; on a narrow screen it stands before the value. "" for actions. */
   readonly head: string;
+  /** null where there is nothing: a dash in the column, left out on a narrow screen. */
   readonly cell: (row: Row) => ReactNode;
   /** Numbers and times: monospaced. */
   readonly figure?: boolean;
@@ -50,19 +51,32 @@ export function DataTable<Row>({
             aria-current={isChosen?.(row) ? "true" : undefined}
           >
             {columns.map((c) => (
-              <td
-                key={c.head}
-                data-head={c.head}
-                data-figure={c.figure ? "" : undefined}
-                data-lead={c.lead ? "" : undefined}
-              >
-                {/* One box, so that the value is one cell of the narrow grid. */}
-                <div>{c.cell(row)}</div>
-              </td>
+              <Cell key={c.head} column={c} value={c.cell(row)} />
             ))}
           </tr>
         ))}
       </tbody>
     </table>
+  );
+}
+
+function Cell({
+  column,
+  value,
+}: {
+  readonly column: Omit<Column<never>, "cell">;
+  readonly value: ReactNode;
+}) {
+  const empty = value === null || value === undefined;
+  return (
+    <td
+      data-head={column.head}
+      data-figure={column.figure ? "" : undefined}
+      data-lead={column.lead ? "" : undefined}
+      data-empty={empty ? "" : undefined}
+    >
+      {/* One box, so that the value is one cell of the narrow grid. */}
+      <div>{empty ? "–" : value}</div>
+    </td>
   );
 }

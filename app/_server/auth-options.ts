@@ -1,8 +1,7 @@
 import type { AuthOptions } from "next-auth";
 import Credentials from "next-auth/providers/credentials";
 import { secret } from "@/lib/config";
-import { signIn } from "@/lib/services/sign-in";
-import { clientAddress } from "./client-address";
+import { authorize, type SignedIn } from "./authorize";
 import { overHttps, sessionCookieName } from "./session";
 
 /** One shift and a little: then a person signs in again. */
@@ -22,18 +21,13 @@ export function authOptions(): AuthOptions {
     providers: [
       Credentials({
         credentials: { email: { type: "email" }, password: { type: "password" } },
-        async authorize(credentials, request) {
-          const result = await signIn(credentials, clientAddress(request.headers));
-          if (result.outcome === "throttled") throw new Error("throttled");
-          if (result.outcome === "refused") return null;
-          return { id: result.personId, sessionVersion: result.sessionVersion };
-        },
+        authorize: (credentials, request) => authorize(credentials, request.headers),
       }),
     ],
     callbacks: {
       jwt({ token, user }) {
         // Only what names the session goes into the cookie: `user` is there at sign-in alone.
-        const signedIn = user as { id: string; sessionVersion: number } | undefined;
+        const signedIn = user as SignedIn | undefined;
         if (signedIn) return { sub: signedIn.id, sessionVersion: signedIn.sessionVersion };
         return { sub: token.sub ?? "", sessionVersion: token.sessionVersion };
       },

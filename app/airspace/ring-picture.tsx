@@ -8,6 +8,8 @@ interface RingPictureProps {
 }
 
 const SIZE = 208;
+/** A strip of its own under the picture, so that no station hides the scale. */
+const SCALE_HEIGHT = 24;
 
 /** The outline seen from above, north up, with the stations near it and a scale. */
 export function RingPicture({ volume, stations }: RingPictureProps) {
@@ -19,7 +21,7 @@ export function RingPicture({ volume, stations }: RingPictureProps) {
   );
   return (
     <svg
-      viewBox={`0 0 ${SIZE} ${SIZE}`}
+      viewBox={`0 0 ${SIZE} ${SIZE + SCALE_HEIGHT}`}
       className="block h-auto w-full max-w-52 border border-line bg-paper"
       role="img"
       aria-label={`Outline of ${volume.name}, north up${near.length > 0 ? `, with ${near.map((s) => s.name).join(", ")}` : ""}`}
@@ -40,15 +42,15 @@ export function RingPicture({ volume, stations }: RingPictureProps) {
               x={x > SIZE / 2 ? x - 7 : x + 7}
               y={y + 3.5}
               textAnchor={x > SIZE / 2 ? "end" : "start"}
-              className="fill-ink text-[11px]"
+              className="fill-ink stroke-paper text-[11px] [paint-order:stroke] [stroke-width:3px]"
             >
               {station.name}
             </text>
           </g>
         );
       })}
-      <path d={`M10 ${SIZE - 10}h${fit.scalePx}`} stroke="var(--ink)" strokeWidth="2" />
-      <text x="10" y={SIZE - 15} className="figures fill-quiet text-[10px]">
+      <path d={`M10 ${SIZE + SCALE_HEIGHT - 8}h${fit.scalePx}`} stroke="var(--ink)" strokeWidth="2" />
+      <text x="10" y={SIZE + SCALE_HEIGHT - 13} className="figures fill-quiet text-[10px]">
         {fit.scaleKm} km
       </text>
     </svg>

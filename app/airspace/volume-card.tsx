@@ -68,7 +68,8 @@ function Hours({ volume }: { readonly volume: AirspaceVolumeBody }) {
       <ul>
         {volume.activeSpans.slice(0, SPANS_SHOWN).map((span) => (
           <li key={span.from}>
-            <UtcTime at={span.from} show="short" /> to <UtcTime at={span.to} show="short" />
+            <UtcTime at={span.from} show="short" /> to{" "}
+            <UtcTime at={span.to} show={span.to.slice(0, 10) === span.from.slice(0, 10) ? "time" : "short"} />
           </li>
         ))}
       </ul>

@@ -66,7 +66,7 @@ const COLUMNS: readonly Column<PersonBody>[] = [
     head: "Role",
     cell: (person) => (person.isSafetyOfficer ? `${person.role}, safety officer` : person.role),
   },
-  { head: "Answers for", cell: (person) => person.authorityName ?? "–" },
+  { head: "Answers for", cell: (person) => person.authorityName },
   { head: "Live tokens", figure: true, cell: (person) => person.liveTokens },
 ];
 
@@ -87,7 +87,7 @@ function actionsColumn(viewerId: string, ask: (asked: Asked) => void): Column<Pe
             End sessions<span className="sr-only"> of {person.name}</span>
           </button>
         )}
-        <Link className="act" href={`/ledger?subject=person&subjectId=${person.id}`}>
+        <Link className="act" href={`/ledger?subjectKind=person&subjectId=${person.id}`}>
           Ledger<span className="sr-only"> of {person.name}</span>
         </Link>
       </div>

@@ -81,7 +81,7 @@ function Rows({ objects }: { readonly objects: readonly ProtectedObjectBody[] })
           figure: true,
           cell: (object) => <span title={object.halfAngleSource}>{settingText(object.halfAngleDeg)}°</span>,
         },
-        { head: "Owner", cell: (object) => object.ownerName ?? "–" },
+        { head: "Owner", cell: (object) => object.ownerName },
         {
           head: "Newest element set",
           figure: true,
