@@ -1,5 +1,5 @@
 import type { PlacedVolume, StationMap } from "./airspace";
-import { type BeamTrack, beamTrack, groundDistanceKm, sweptInRing } from "./airspace-beam";
+import { type BeamTrack, beamTrack, groundDistanceKm, insideRing, sweptInRing } from "./airspace-beam";
 import { type Interval, merge } from "./interval";
 
 /** Where the beam points at one time; geometric angles, refraction left out. */
@@ -9,13 +9,17 @@ export interface Pointing {
   readonly elevationRad: number;
 }
 
+/** Farther than any two neighbouring corners of a placed ring, which stand a quarter of a degree apart. */
+const CORNER_SPACING_KM = 30;
+
 /** A stretch is known to this, ms; it is always a little too long, never too short. */
 const EDGE_MS = 100;
 
 /**
  * Where the beam runs through a volume. Between two samples the whole area that the beam sweeps is looked
  * at and halved until the edges stand to 0.1 s, so no corner is cut unseen; a gap of under one sample
- * counts as inside. `pointingAt` gives the pointing between samples.
+ * counts as inside. A volume that may be anywhere is everywhere. `pointingAt` gives the pointing between
+ * samples.
  */
 export function volumeSpans(args: {
   readonly map: StationMap;
@@ -24,6 +28,8 @@ export function volumeSpans(args: {
   readonly pointingAt: (atMs: number) => Pointing;
 }): Interval[] {
   const { map, volume, samples, pointingAt } = args;
+  const [first, last] = [samples[0], samples.at(-1)];
+  if (volume.ring.length === 0 && first && last) return [{ fromMs: first.atMs, toMs: last.atMs }];
   const trackOf = (pointing: Pointing): BeamTrack | null =>
     beamTrack({
       sphereKm: map.sphereKm,
@@ -53,8 +59,7 @@ export function volumeSpans(args: {
 }
 
 /**
- * The volumes that a beam from the station can reach at all above an elevation: the others need no look.
- * `volume.ring` has its corners at most a quarter of a degree apart, so the nearest corner tells.
+ * True when a beam from the station above an elevation can reach the volume at all: others need no look.
  */
 export function withinReach(map: StationMap, volume: PlacedVolume, minElevationRad: number): boolean {
   const reachKm = groundDistanceKm({
@@ -63,12 +68,8 @@ export function withinReach(map: StationMap, volume: PlacedVolume, minElevationR
     elevationRad: minElevationRad,
     heightKm: volume.ceilingKm,
   });
+  if (volume.ring.length === 0) return true;
   if (reachKm === null) return false;
-  const cornerSpacingKm = 30;
   const nearestKm = Math.min(...volume.ring.map((corner) => Math.hypot(corner.eastKm, corner.northKm)));
-  const origin = { eastKm: 0, northKm: 0 };
-  return (
-    nearestKm <= reachKm + cornerSpacingKm ||
-    sweptInRing({ near: origin, far: origin }, { near: origin, far: origin }, volume.ring)
-  );
+  return nearestKm <= reachKm + CORNER_SPACING_KM || insideRing({ eastKm: 0, northKm: 0 }, volume.ring);
 }

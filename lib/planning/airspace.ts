@@ -24,7 +24,7 @@ export interface StationMap {
   readonly sphereKm: number;
 }
 
-/** A volume with its ring on the map of one station. */
+/** A volume with its ring on the map of one station; an empty ring means that it may be anywhere. */
 export interface PlacedVolume {
   readonly id: string;
   readonly version: number;
@@ -62,9 +62,14 @@ export function groundPoint(map: StationMap, longitudeDeg: number, latitudeDeg: 
   return { eastKm: (east / level) * distanceKm, northKm: (north / level) * distanceKm };
 }
 
-/** A volume on the map of a station. Crossing the antimeridian or a pole makes no difference there. */
+/**
+ * A volume on the map of a station. Crossing the antimeridian or a pole makes no difference there. A ring
+ * that encloses nothing or holds something that is no number is kept as empty: it may be anywhere.
+ */
 export function placeVolume(map: StationMap, shape: VolumeShape): PlacedVolume {
-  const ring = denseRing(shape.ring).map(([longitude, latitude]) => groundPoint(map, longitude, latitude));
+  const isReadable = shape.ring.every(([longitude, latitude]) => Number.isFinite(longitude + latitude));
+  const dense = isReadable ? denseRing(shape.ring) : [];
+  const ring = dense.length < 3 ? [] : dense.map(([lon, lat]) => groundPoint(map, lon, lat));
   const { id, version, floorM, ceilingM } = shape;
   return { id, version, floorKm: floorM / 1000, ceilingKm: ceilingM / 1000, ring };
 }

@@ -10,8 +10,9 @@ export function intervalOf(from: Date, to: Date): Interval {
   return { fromMs: from.getTime(), toMs: to.getTime() };
 }
 
-/** An airspace volume with its hours as the rules read them. */
+/** An airspace volume with its hours as the rules read them; hours that can't be read are not known. */
 export function volumeFacts(row: VolumeRow): VolumeFacts {
+  const spans = row.activeSpans.map(({ from, to }) => ({ fromMs: Date.parse(from), toMs: Date.parse(to) }));
   return {
     id: row.id,
     name: row.name,
@@ -19,7 +20,7 @@ export function volumeFacts(row: VolumeRow): VolumeFacts {
     authorityId: row.authorityId,
     floorText: row.floorText,
     ceilingText: row.ceilingText,
-    activeSpans: row.activeSpans.map(({ from, to }) => ({ fromMs: Date.parse(from), toMs: Date.parse(to) })),
+    activeSpans: spans.every(({ fromMs, toMs }) => fromMs <= toMs) ? spans : [],
     scheduleKnownUntilMs: row.scheduleKnownUntil.getTime(),
     liftable: row.liftable,
   };

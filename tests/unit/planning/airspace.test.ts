@@ -231,6 +231,22 @@ describe("stretches of a moving beam", () => {
     expect((found[0]?.toMs ?? 0) - (found[0]?.fromMs ?? 0)).toBeLessThanOrEqual(200);
   });
 
+  it("are the whole span for a volume whose ring can't be read", () => {
+    for (const ring of [
+      [],
+      [[10, 0]],
+      [
+        [10, 0],
+        [10, Number.NaN],
+        [11, 0],
+      ],
+    ] as [number, number][][]) {
+      const unreadable = volume({ ring });
+      expect(withinReach(EQUATOR, placeVolume(EQUATOR, unreadable), 20 * DEG)).toBe(true);
+      expect(spans(turning(1), 10, unreadable)).toEqual([{ fromMs: 0, toMs: 10_000 }]);
+    }
+  });
+
   it("are empty when the beam never comes near", () => {
     expect(spans(turning(1), 10, volume({}))).toEqual([]);
   });
