@@ -3,7 +3,7 @@ import { EmptyState } from "@/app/_components/empty-state";
 import { Facts } from "@/app/_components/facts";
 import { Figure, Figures } from "@/app/_components/figure";
 import { PageHeader } from "@/app/_components/page-header";
-import { durationText, numberText } from "@/app/_format/figures";
+import { numberText } from "@/app/_format/figures";
 import { zoneTime } from "@/app/_format/utc";
 import { requirePerson } from "@/app/_server/require-person";
 import type { AuthorityBody } from "@/lib/contracts/authorities";
@@ -42,12 +42,14 @@ function AuthorityCard({ authority, nowMs }: { readonly authority: AuthorityBody
       <div className="my-4">
         <Figures label={`Deadlines of ${authority.name}`}>
           <Figure
-            value={durationText(authority.leadTimeMin * 60)}
+            value={numberText(authority.leadTimeMin)}
+            unit="min"
             label="lead time"
             note="a request goes out at least this long before the dwell"
           />
           <Figure
-            value={durationText(authority.changeDeadlineMin * 60)}
+            value={numberText(authority.changeDeadlineMin)}
+            unit="min"
             label="change deadline"
             note="nearer to the dwell than this a change is refused: it is scrubbed instead"
           />
