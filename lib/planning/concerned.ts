@@ -1,4 +1,4 @@
-import { type Interval, intersect, overlaps, subtract } from "./interval";
+import { type Interval, intersect, merge, overlaps, subtract } from "./interval";
 import type { AnswerFacts, AuthorityFacts, OwnFacts, PassFacts, VolumeFacts } from "./pass-facts";
 import type { PassGeometry } from "./pass-geometry";
 
@@ -23,7 +23,7 @@ export function volumeHours(
   const knownUntilMs =
     volume.activeSpans.length === 0 ? Number.NEGATIVE_INFINITY : volume.scheduleKnownUntilMs;
   for (const span of spans) {
-    const inside = volume.activeSpans.map((hours) => intersect(span, hours)).filter((part) => part !== null);
+    const inside = merge(volume.activeSpans.flatMap((hours) => intersect(span, hours) ?? []));
     active.push(...inside);
     const later = intersect(span, { fromMs: knownUntilMs, toMs: Number.POSITIVE_INFINITY });
     if (later) unknown.push(...subtract(later, inside));

@@ -30,7 +30,8 @@ export const airspace: Rule = (pass, facts) => {
     const lifted = liftedSpans(volume, facts);
     const left = active.flatMap((span) => subtract(span, lifted));
     closures.push(...left.map((span) => ({ ...span, ...verdict })));
-    closures.push(...unknown.map((span) => unknownHours(volume, span)));
+    const untold = unknown.flatMap((span) => subtract(span, lifted));
+    closures.push(...untold.map((span) => unknownHours(volume, span)));
   }
   return closures;
 };

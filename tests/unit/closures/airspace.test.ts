@@ -32,6 +32,11 @@ describe("airspace", () => {
     expect(judged({ activeSpans: [span(-3600, 50), span(300, 3600)] })).toEqual([]);
   });
 
+  it("counts overlapping hours once", () => {
+    const activeSpans = [span(0, 130), span(120, 150)];
+    expect(brief(judged({ activeSpans }))).toEqual([["pending", 100, 150]]);
+  });
+
   it("is pending where the beam runs through an active volume that its authority may lift", () => {
     const closures = judged({});
     expect(brief(closures)).toEqual([["pending", 100, 150]]);
@@ -68,6 +73,10 @@ describe("airspace", () => {
       ["pending", 100, 150],
       ["not checked", 170, 200],
     ]);
+    const answered = judged({ activeSpans: [] }, [answer("no objection")], span(90, 180));
+    expect(brief(answered)).toEqual([["not checked", 180, 200]]);
+    const shut = judged({ activeSpans: [], liftable: false }, [answer("no objection")], span(90, 180));
+    expect(brief(shut)).toEqual([["not checked", 100, 200]]);
   });
 
   it("reads not checked over the whole pass when the volumes have changed since it was measured", () => {
