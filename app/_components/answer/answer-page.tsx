@@ -1,0 +1,110 @@
+"use client";
+
+import { useEffect, useState } from "react";
+import { sendJson } from "@/app/_client/fetch-json";
+import { Button } from "@/app/_components/button";
+import { UtcTime } from "@/app/_components/utc-time";
+import { durationText } from "@/app/_format/figures";
+import type { AnswerPageBody } from "@/lib/contracts/answers";
+import { AnswerForm } from "./answer-form";
+
+/** What somebody sees who opened the link in a notice: the question, the answer in force, and the form. */
+export function AnswerPage({ token, initial }: { readonly token: string; readonly initial: AnswerPageBody }) {
+  const [body, setBody] = useState(initial);
+  const [changing, setChanging] = useState(false);
+  const path = `/api/answers/${encodeURIComponent(token)}`;
+  useEffect(() => {
+    // The page's script tells that somebody has it open; a mail scanner that only reads the address does not.
+    void sendJson(`${path}/opened`, "POST").catch(() => undefined);
+  }, [path]);
+  const asks = body.canAnswer && (body.answer === null || changing);
+  return (
+    <div className="mx-auto grid w-full max-w-2xl gap-5">
+      <Question body={body} />
+      {body.answer ? <Given body={body} /> : null}
+      {body.closedBecause ? <p className="border-l-4 border-dwell px-3 py-1">{body.closedBecause}</p> : null}
+      {asks ? (
+        <section className="sheet p-4 sm:p-5" aria-label="Answer">
+          <AnswerForm<AnswerPageBody>
+            path={path}
+            asksName
+            {...(body.answer ? { given: body.answer } : {})}
+            onAnswered={(answered) => {
+              setBody(answered);
+              setChanging(false);
+              window.scrollTo({ top: 0 });
+            }}
+          />
+        </section>
+      ) : null}
+      {body.canAnswer && body.answer && !changing ? (
+        <Button className="justify-self-start" onClick={() => setChanging(true)}>
+          Change the answer
+        </Button>
+      ) : null}
+      <details className="sheet p-4">
+        <summary className="min-h-8 cursor-pointer font-semibold">The notice in full</summary>
+        <pre className="mt-3 whitespace-pre-wrap font-sans">{body.text}</pre>
+      </details>
+      <p className="text-sm text-quiet">
+        Your answer goes into the engagement book and to the people at the station. It is not a NOTAM and
+        replaces no clearance that other rules ask for.
+      </p>
+    </div>
+  );
+}
+
+function Question({ body }: { readonly body: AnswerPageBody }) {
+  const zone = body.authorityTimeZone;
+  return (
+    <header>
+      <p className="text-quiet">For {body.authorityName}</p>
+      <h1 className="mt-1 text-2xl leading-tight font-bold">
+        {asking(body)} E-{body.engagementNumber}
+      </h1>
+      <p className="mt-2">
+        The laser station {body.stationName} would like to lase the debris fragment {body.fragmentName} for{" "}
+        {durationText((Date.parse(body.dwellTo) - Date.parse(body.dwellFrom)) / 1000)}.
+      </p>
+      <dl className="mt-4 grid gap-x-4 gap-y-2 sm:grid-cols-[7rem_1fr]">
+        <dt className="text-quiet">From</dt>
+        <dd className="figures">
+          <UtcTime at={body.dwellFrom} zone={zone} />
+        </dd>
+        <dt className="text-quiet">To</dt>
+        <dd className="figures">
+          <UtcTime at={body.dwellTo} zone={zone} />
+        </dd>
+        {body.answerBy && body.canAnswer ? (
+          <>
+            <dt className="text-quiet">Answer by</dt>
+            <dd className="figures">
+              <UtcTime at={body.answerBy} zone={zone} />
+            </dd>
+          </>
+        ) : null}
+      </dl>
+    </header>
+  );
+}
+
+function asking(body: AnswerPageBody): string {
+  if (body.kind === "cancellation") return "Cancelled: engagement";
+  if (body.kind === "completion") return "Completed: engagement";
+  return body.answer ? "Your answer to engagement" : "May we lase? Engagement";
+}
+
+function Given({ body }: { readonly body: AnswerPageBody }) {
+  if (!body.answer) return null;
+  const { outcome, conditions, reasons, answeredBy, answeredAt } = body.answer;
+  return (
+    <div role="status" className="sheet border-ink p-4">
+      <p>
+        Recorded: <strong>{outcome}</strong>, by {answeredBy},{" "}
+        <UtcTime at={answeredAt} zone={body.authorityTimeZone} />.
+      </p>
+      {conditions ? <p className="mt-1">Conditions: {conditions}</p> : null}
+      {reasons ? <p className="mt-1">Reasons: {reasons}</p> : null}
+    </div>
+  );
+}
