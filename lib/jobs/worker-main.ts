@@ -38,6 +38,8 @@ function once(work: () => Promise<void>): () => void {
 }
 
 main().catch((error: unknown) => {
-  console.error(error instanceof Error ? error.message : error);
+  // A refused connection to several addresses comes as an error without words.
+  const words = error instanceof Error && error.message !== "" ? error.message : String(error);
+  console.error(`The worker can't run: ${words}`);
   process.exit(1);
 });

@@ -19,7 +19,7 @@ export interface ReadText {
 /** Element sets that one import takes, good and bad. */
 export const MAX_IMPORT_SETS = 20_000;
 
-/** Texts up to this are read on the spot: some 100 sets, about 50 ms. */
+/** Texts up to this are read on the spot: some 100 sets, about 25 ms. */
 const SHORT_CHARS = 16_000;
 
 /** Reads every text, long ones in a process of their own; 422 when they hold too many sets. */

@@ -23,7 +23,7 @@ const HORIZON_SLACK_MS = 6 * HOUR_MS;
 
 /**
  * Fragments in one chunk, which is to hold its process for at most 2 s: one over four stations has some 75
- * passes in a week, at about 20 ms each with screening and planning (measured).
+ * passes in a week, which take about a second of one core with screening and planning (measured).
  */
 const FRAGMENTS_PER_CHUNK = 1;
 
