@@ -19,6 +19,9 @@ const say = (words: string): void => console.log(words);
 /** A demo whose newest element sets are older than this gets fresh ones at the next start. */
 const STALE_MS = 8 * HOUR_MS;
 
+/** The past needs few fragments; the coming week sweeps them all. */
+const PAST_FRAGMENTS = 14;
+
 const PLANNER = "ines@dwellbook.invalid";
 
 /** Fills an empty database with the invented demo; brings an older demo up to date. */
@@ -39,7 +42,7 @@ async function fillAll(nowMs: number): Promise<void> {
   const pastMs = nowMs - 50 * HOUR_MS;
   say("importing element sets of some three hundred protected objects and forty fragments");
   await importProtected(planner, inventProtected(), pastMs - HOUR_MS, pastMs);
-  const past = await importFragments(planner, fragments, pastMs - HOUR_MS, pastMs);
+  const past = await importFragments(planner, fragments.slice(0, PAST_FRAGMENTS), pastMs - HOUR_MS, pastMs);
   await inTransaction((tx) => fillBodies(tx, fragments));
   say("sweeping passes of the last two days");
   if (past) await sweepHere(past, pastMs);
