@@ -23,11 +23,11 @@ export type Config = z.infer<typeof schema>;
 let cached: Config | undefined;
 
 /**
- * Reads and checks the environment once. Throws with the names of what is wrong;
- * secrets have no default: {@link secret} refuses an empty one at first use.
+ * Reads and checks the environment once; an empty value counts as unset. Throws with the names of what is
+ * wrong; secrets have no default: {@link secret} refuses an empty one at first use.
  */
 export function config(): Config {
-  cached ??= schema.parse(process.env);
+  cached ??= schema.parse(Object.fromEntries(Object.entries(process.env).filter(([, value]) => value !== "")));
   return cached;
 }
 
