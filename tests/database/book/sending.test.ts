@@ -4,6 +4,8 @@ import { SMTPServer } from "smtp-server";
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from "vitest";
 import { database } from "@/db/client";
 import { inTransaction } from "@/db/transaction";
+import { sendNoticeTask } from "@/lib/jobs/tasks/send-notice";
+import { startWorker } from "@/lib/jobs/worker";
 import { bookEngagement } from "@/lib/services/book-engagement";
 import { moveEngagement } from "@/lib/services/move-engagement";
 import { raiseNotices } from "@/lib/services/raise-notices";
@@ -81,6 +83,17 @@ async function runJobs(): Promise<number> {
   return failed;
 }
 
+const WAITING = sql`select 1 from graphile_worker.jobs where task_identifier = 'send-notice'`;
+
+/** Waits for something that another process or timer brings about; fails after 20 s. */
+async function until(holds: () => Promise<boolean>): Promise<void> {
+  const deadline = Date.now() + 20_000;
+  while (!(await holds())) {
+    if (Date.now() > deadline) throw new Error("it did not come about within 20 s");
+    await new Promise((resolve) => setTimeout(resolve, 100));
+  }
+}
+
 const mailsTo = (email: string) =>
   inbox.filter(({ mail }) => (mail.to as AddressObject).value.some(({ address }) => address === email));
 
@@ -126,6 +139,26 @@ describe("mail about an engagement", () => {
     ]);
     expect(mailsTo(scene.airUnit.email)).toHaveLength(3);
     expect(inbox).toHaveLength(6);
+  });
+
+  it("is sent by the worker's own task from the queue, and tried again later when that failed", async () => {
+    const body = await bookIn(scene);
+    answer = "refuse for now";
+    const worker = await startWorker([sendNoticeTask]);
+    try {
+      const refused = sql`select 1 from notices where engagement_id = ${body.id} and attempts > 0`;
+      await until(async () => (await rowsOf(refused)).length === 2);
+      expect(inbox).toEqual([]);
+      answer = "take";
+      // The library waits e seconds after the first failure, then tries by itself.
+      await until(async () => (await rowsOf(WAITING)).length === 0);
+    } finally {
+      await worker.stop(5000);
+    }
+    const [sent] = await noticesOfEngagement(body.id);
+    expect(sent?.delivery).toBe("sent");
+    expect(Number(sent?.attempts)).toBeGreaterThan(1);
+    expect(inbox).toHaveLength(2);
   });
 
   it("has the parts, headers and link that the notice was given", async () => {
