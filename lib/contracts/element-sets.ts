@@ -1,4 +1,5 @@
 import { z } from "zod";
+import type { Elements } from "@/lib/physics/orbit/elements";
 import { identifierText } from "./common";
 
 /** The report of POST /api/element-sets. */
@@ -47,28 +48,15 @@ export const importOptions = z
   });
 export type ImportOptions = z.infer<typeof importOptions>;
 
-/** One stored element set. */
-export interface ElementSetBody {
+/** One stored element set: the elements with their names and units, and where they come from. */
+export interface ElementSetBody extends Elements {
   readonly id: string;
   readonly fragmentId: string | null;
   readonly protectedObjectId: string | null;
   /** The import that brought it; null for what came another way. */
   readonly importId: string | null;
-  readonly catalogNumber: number;
-  readonly objectName: string | null;
-  readonly objectId: string | null;
+  /** The epoch to the millisecond; `epochMs` keeps microseconds. */
   readonly epochAt: string;
-  /** The same in Unix milliseconds with a fraction: microseconds survive. */
-  readonly epochMs: number;
-  readonly meanMotionRevPerDay: number;
-  readonly eccentricity: number;
-  readonly inclinationDeg: number;
-  readonly raanDeg: number;
-  readonly argPericenterDeg: number;
-  readonly meanAnomalyDeg: number;
-  readonly bstar: number;
-  readonly meanMotionDot: number;
-  readonly meanMotionDdot: number;
   readonly format: string;
   readonly raw: string;
   readonly source: string;
