@@ -12,6 +12,8 @@ export const NAV_ITEMS: readonly NavItem[] = [
   { href: "/calendar", label: "Calendar", rights: ["read book"] },
   { href: "/passes", label: "Passes", rights: ["search passes"] },
   { href: "/fragments", label: "Fragments", rights: ["read book"] },
+  { href: "/engagements", label: "Engagements", rights: ["read book"] },
+  { href: "/import", label: "Import", rights: ["import elements"] },
   { href: "/notices", label: "Notices", rights: ["see all notices", "see own notices"] },
   { href: "/stations", label: "Stations", rights: ["read book"] },
   { href: "/airspace", label: "Airspace", rights: ["read book"] },

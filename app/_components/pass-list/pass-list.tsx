@@ -20,16 +20,23 @@ const STEP = 60;
 interface PassListProps {
   /** The server's time at the first render. */
   readonly nowMs: number;
+  /** On a fragment's own page: only its passes, over the whole week, without the bar of filters. */
+  readonly fragmentId?: string;
   readonly stations: readonly { readonly id: string; readonly name: string }[];
   readonly fragments: readonly { readonly id: string; readonly name: string }[];
 }
 
 /** Passes by the filters in the address bar, with what each is worth and what closes it. */
-export function PassList({ nowMs, stations, fragments }: PassListProps) {
+export function PassList({ nowMs, fragmentId, stations, fragments }: PassListProps) {
   const router = useRouter();
   const pathname = usePathname();
   const params = useSearchParams();
-  const filters = useMemo(() => readFilters(new URLSearchParams(params)), [params]);
+  const filters = useMemo((): PassFilters => {
+    const read = readFilters(new URLSearchParams(params));
+    return fragmentId
+      ? { ...read, fragment: fragmentId, station: "", from: "", hours: 168, worthOnly: false }
+      : read;
+  }, [params, fragmentId]);
   const [shown, setShown] = useState(STEP);
   const { data, error, isLoading, mutate } = useSWR<{ passes: PassBody[] }>(
     passesPath(filters, nowMs),
