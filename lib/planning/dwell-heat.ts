@@ -40,7 +40,8 @@ export function shortestMeltS(heatW: readonly number[], stepS: number, meltJ: nu
     sumJ += watts * stepS;
     for (let leaving = heatW[first]; leaving !== undefined && sumJ >= meltJ; leaving = heatW[first]) {
       // The run melts the fragment with this much to spare at the end that heats less.
-      const spareS = Math.min(stepS, (sumJ - meltJ) / Math.min(leaving, watts));
+      const slower = Math.min(leaving, watts);
+      const spareS = slower > 0 ? Math.min(stepS, (sumJ - meltJ) / slower) : 0;
       const seconds = (last - first + 1) * stepS - spareS;
       shortest = shortest === null ? seconds : Math.min(shortest, seconds);
       sumJ -= leaving * stepS;

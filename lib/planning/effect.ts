@@ -3,13 +3,14 @@ import { meanPerigeeAltitudeKm } from "@/lib/physics/effect/mean-elements";
 import { makeTrack, type Track } from "@/lib/physics/effect/track";
 import type { SiteFrame } from "@/lib/physics/frames/earth";
 import type { Orbit } from "@/lib/physics/orbit/propagate";
-import { type Band, bandsAfter, type Knowledge } from "./dwell-band";
+import { bandsAfter, type Knowledge } from "./dwell-band";
 import { heatCurve, meltOnset } from "./dwell-heat";
 import { nudgeOf } from "./dwell-nudge";
+import type { Band } from "./dwell-percentiles";
 import { makeShots } from "./dwell-shots";
 import { bodyFault, type FragmentBody, laserFault, type PulsedLaser } from "./laser";
 
-export type { Band } from "./dwell-band";
+export type { Band } from "./dwell-percentiles";
 
 /** Step of the heat sum. */
 const HEAT_STEP_S = 1;

@@ -5,7 +5,7 @@ import { chooseDwell, type DwellLimits } from "./choose-dwell";
 import { type Effect, effectOnTrack } from "./effect";
 import type { Interval } from "./interval";
 import { type Aim, bodyFault, type Fault, type FragmentBody, laserFault, type PulsedLaser } from "./laser";
-import { buildProfile, type Profile, type ProfileSample } from "./profile";
+import { buildProfile, type NoProfile, type Profile, type ProfileSample } from "./profile";
 
 /** Most samples that an estimate answers with; a second apart as long as that suffices. */
 const MAX_SAMPLES = 1200;
@@ -19,6 +19,16 @@ const NO_LIMITS: DwellLimits = {
   maxPulses: null,
   maxEnergyJ: null,
   maxHeatingS: null,
+};
+
+/** Where in the question each argument of the profile stands. */
+const PATHS: Readonly<Record<NoProfile["about"], string>> = {
+  laser: "laser",
+  body: "fragment",
+  orbit: "elementSet",
+  from: "from",
+  to: "to",
+  step: "to",
 };
 
 /** A question about one fragment, one station and one interval, outside the book. */
@@ -64,7 +74,7 @@ export function impulseEstimate(
   const stepS = Math.max(1, Math.ceil((toMs - fromMs) / 1000 / MAX_SAMPLES));
   const frame = makeSiteFrame(station);
   const built = buildProfile({ orbit: made.orbit, frame, laser, body: fragment, fromMs, toMs, stepS, aim });
-  if (!built.ok) return { ok: false, path: "to", reason: built.reason };
+  if (!built.ok) return { ok: false, path: PATHS[built.about], reason: built.reason };
   const { profile } = built;
   const worked = effectOnTrack(profile.track, { laser, body: fragment, fromMs, toMs });
   if (!worked.ok) return { ok: false, path: "fragment", reason: worked.reason };

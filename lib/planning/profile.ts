@@ -51,6 +51,13 @@ export interface Profile {
   readonly shots: Shots;
 }
 
+/** Why there is no profile, and which of the arguments is to blame. */
+export interface NoProfile {
+  readonly ok: false;
+  readonly about: "laser" | "body" | "orbit" | "from" | "to" | "step";
+  readonly reason: string;
+}
+
 interface ProfileArgs {
   readonly orbit: Orbit;
   readonly frame: SiteFrame;
@@ -69,23 +76,21 @@ interface ProfileArgs {
  * a curve of its own; `chooseDwell` scores every stretch by itself. Refused with a sentence that names the
  * value or the moment that the model doesn't cover.
  */
-export function buildProfile(
-  args: ProfileArgs,
-): { ok: true; profile: Profile } | { ok: false; reason: string } {
+export function buildProfile(args: ProfileArgs): { ok: true; profile: Profile } | NoProfile {
   const { orbit, frame, laser, body, fromMs, toMs, stepS, aim } = args;
-  const fault = laserFault(laser) ?? bodyFault(body, laser.pulseWidthNs) ?? stepFault(args);
-  if (fault) return { ok: false, reason: fault.reason };
+  const fault = inputFault(args);
+  if (fault) return fault;
   const made = makeTrack(orbit, frame, fromMs, toMs);
   if (!made.ok) return made;
   const { track } = made;
   const mean = meanFromState(track.at(fromMs).state);
-  if (!mean)
-    return { ok: false, reason: "The fragment's orbit has no mean elements: it is open or grazes 180°." };
+  if (!mean) return refused("orbit", "The fragment's orbit is open or grazes 180°: it has no mean elements.");
   const shots = makeShots(laser, body);
   const measure = measureOf(aim, mean, body);
   const worth = worthCurve(track, shots, measure, mean, stepS);
-  if (!worth)
-    return { ok: false, reason: "Lasing this whole span would throw the fragment out of a bound orbit." };
+  if (!worth) {
+    return refused("body", "Lasing this whole span would throw the fragment out of a bound orbit.");
+  }
   const samples = worth.map((worthPerS, i) =>
     sampleAt(frame, track, shots, fromMs + i * stepS * 1000, worthPerS),
   );
@@ -109,10 +114,21 @@ export function buildProfile(
   };
 }
 
-function stepFault(args: ProfileArgs): { reason: string } | null {
-  const { stepS, fromMs, toMs } = args;
-  if (!(stepS > 0 && Number.isFinite(stepS))) return { reason: "stepS must be above 0 seconds." };
-  if ((toMs - fromMs) / 1000 / stepS > MAX_SAMPLES) return { reason: "stepS is too small for the span." };
+function refused(about: NoProfile["about"], reason: string): NoProfile {
+  return { ok: false, about, reason };
+}
+
+/** What can be refused before anything is computed. */
+function inputFault(args: ProfileArgs): NoProfile | null {
+  const { laser, body, stepS, fromMs, toMs } = args;
+  const ofLaser = laserFault(laser);
+  if (ofLaser) return refused("laser", ofLaser.reason);
+  const ofBody = bodyFault(body, laser.pulseWidthNs);
+  if (ofBody) return refused("body", ofBody.reason);
+  if (!(stepS > 0 && Number.isFinite(stepS))) return refused("step", "stepS must be above 0 seconds.");
+  if ((toMs - fromMs) / 1000 / stepS > MAX_SAMPLES) {
+    return refused("step", "stepS is too small for the span.");
+  }
   return null;
 }
 

@@ -4,6 +4,7 @@ import type { Orbit, OrbitState } from "@/lib/physics/orbit/propagate";
 import { isoTime } from "@/lib/physics/time";
 import type { Vec3 } from "@/lib/physics/vector";
 import { gravityKmPerS2 } from "./gravity";
+import { cubic, quintic } from "./hermite";
 
 /** Longest span that one track covers. */
 const MAX_SPAN_MS = 24 * 3600_000;
@@ -33,6 +34,13 @@ export interface Track {
   middleOfSecond(second: number): TrackPoint;
 }
 
+/** Why there is no track, and which of its inputs is to blame. */
+export interface NoTrack {
+  readonly ok: false;
+  readonly about: "from" | "to" | "orbit";
+  readonly reason: string;
+}
+
 interface Node {
   readonly state: OrbitState;
   readonly acceleration: Vec3;
@@ -47,9 +55,9 @@ export function makeTrack(
   frame: SiteFrame,
   fromMs: number,
   toMs: number,
-): { ok: true; track: Track } | { ok: false; reason: string } {
+): { ok: true; track: Track } | NoTrack {
   const fault = spanFault(fromMs, toMs);
-  if (fault) return { ok: false, reason: fault };
+  if (fault) return { ok: false, about: "to", reason: fault };
   // A second beyond the end, so that the last whole second has a middle.
   const startMs = fromMs - 1000;
   const count = Math.max(1, Math.ceil((toMs + 1000 - startMs) / NODE_SPACING_MS));
@@ -57,7 +65,7 @@ export function makeTrack(
   const nodes: Node[] = [];
   for (let i = 0; i <= count; i++) {
     const at = orbit.stateAt(startMs + i * spacingMs);
-    if (!at.ok) return { ok: false, reason: at.reason };
+    if (!at.ok) return { ok: false, about: "orbit", reason: at.reason };
     const { x, y, z } = at.state.rKm;
     nodes.push({ state: at.state, acceleration: gravityKmPerS2(x, y, z) });
   }
@@ -66,6 +74,7 @@ export function makeTrack(
   if (lowMs === null) return { ok: true, track };
   return {
     ok: false,
+    about: lowMs === fromMs ? "from" : "to",
     reason: `The fragment is below the station's horizon at ${isoTime(lowMs)}: the model covers elevations from 0 upwards.`,
   };
 }
@@ -143,36 +152,6 @@ function interpolate(a: Node, b: Node, share: number, spacingS: number): OrbitSt
       z: cubic(vA.z, gA.z, vB.z, gB.z, share, spacingS),
     },
   };
-}
-
-/** Through value, rate and second rate at both ends; `t` from 0 to 1 over `s` seconds. */
-function quintic(
-  r0: number,
-  v0: number,
-  a0: number,
-  r1: number,
-  v1: number,
-  a1: number,
-  t: number,
-  s: number,
-): number {
-  const c1 = v0 * s;
-  const c2 = 0.5 * a0 * s * s;
-  const miss = r1 - r0 - c1 - c2;
-  const missRate = v1 * s - c1 - 2 * c2;
-  const missSecond = a1 * s * s - 2 * c2;
-  const c3 = 10 * miss - 4 * missRate + 0.5 * missSecond;
-  const c4 = -15 * miss + 7 * missRate - missSecond;
-  const c5 = 6 * miss - 3 * missRate + 0.5 * missSecond;
-  return r0 + t * (c1 + t * (c2 + t * (c3 + t * (c4 + t * c5))));
-}
-
-/** Through value and rate at both ends; `t` from 0 to 1 over `s` seconds. */
-function cubic(v0: number, a0: number, v1: number, a1: number, t: number, s: number): number {
-  const c1 = a0 * s;
-  const miss = v1 - v0 - c1;
-  const missRate = a1 * s - c1;
-  return v0 + t * (c1 + t * (3 * miss - missRate + t * (missRate - 2 * miss)));
 }
 
 /** First time, to 10 s and at the ends, at which the fragment stands under the horizon; null when it never does. */

@@ -58,7 +58,7 @@ describe("track", () => {
   it("passes on why an orbit has no state", () => {
     const lost = { ...pass.orbit, stateAt: () => ({ ok: false as const, reason: "the object has decayed" }) };
     const made = makeTrack(lost, pass.frame, pass.fromMs, pass.toMs);
-    expect(made).toEqual({ ok: false, reason: "the object has decayed" });
+    expect(made).toEqual({ ok: false, about: "orbit", reason: "the object has decayed" });
   });
 });
 
