@@ -39,20 +39,25 @@ export function checkRanges(e: Elements): ElementFault[] {
     message: "The value is not a finite number.",
   }));
   if (faults.length > 0) return faults;
-  const require = (key: keyof Elements, holds: boolean, message: string): void => {
+  const demand = (key: keyof Elements, holds: boolean, message: string): void => {
     if (!holds) faults.push({ key, message });
   };
-  const angle = (key: keyof Elements, name: string, value: number, most: number): void =>
-    require(key, value >= 0 &&
-      value <= most, `The ${name} is ${value} degrees; it lies between 0 and ${most}.`);
+  const angle = (key: keyof Elements, name: string, value: number, most: number): void => {
+    const holds = value >= 0 && value <= most;
+    demand(key, holds, `The ${name} is ${value} degrees; it lies between 0 and ${most}.`);
+  };
   angle("inclinationDeg", "inclination", e.inclinationDeg, 180);
   angle("raanDeg", "right ascension of the ascending node", e.raanDeg, 360);
   const eccentric = e.eccentricity >= 0 && e.eccentricity < 1;
-  require("eccentricity", eccentric, `The eccentricity is ${e.eccentricity}; it lies between 0 and 1, without 1.`);
+  demand(
+    "eccentricity",
+    eccentric,
+    `The eccentricity is ${e.eccentricity}; it lies between 0 and 1, without 1.`,
+  );
   angle("argPericenterDeg", "argument of pericentre", e.argPericenterDeg, 360);
   angle("meanAnomalyDeg", "mean anomaly", e.meanAnomalyDeg, 360);
   const n = e.meanMotionRevPerDay;
-  require("meanMotionRevPerDay", n >= MIN_REV_PER_DAY && n <= MAX_REV_PER_DAY, meanMotionMessage(n));
+  demand("meanMotionRevPerDay", n >= MIN_REV_PER_DAY && n <= MAX_REV_PER_DAY, meanMotionMessage(n));
   return faults;
 }
 

@@ -1,9 +1,10 @@
+import { MAX_LINE_CHARS, MAX_LINES, MAX_TEXT_CHARS } from "./limits";
 import { looksLikeOmmCsv, parseOmmCsv } from "./omm-csv";
 import { parseOmmJson } from "./omm-json";
 import { looksLikeKvn, parseOmmKvn } from "./omm-kvn";
 import { parseOmmXml } from "./omm-xml";
 import type { ParsedSet, ParsedText, RejectedSet, SetFormat } from "./set-types";
-import { withoutByteOrderMark } from "./text-lines";
+import { hasMoreLines, withoutByteOrderMark } from "./text-lines";
 import { parseTle } from "./tle";
 
 export type { ParsedSet, ParsedText, RejectedSet, SetFormat };
@@ -17,15 +18,18 @@ const READERS: Readonly<Record<SetFormat, (text: string) => ParsedText>> = {
 };
 
 /** A first line of any kind, a name, and after it a line 1 with its catalogue number. */
-const NAME_AND_LINE_1 = /^\s*[^\r\n]*[\r\n]+1 [0-9A-Z]\d{4}/;
+const NAME_AND_LINE_1 = /^[^\r\n]*[\r\n]+1 [0-9A-Z]\d{4}/;
 
 /** The file form of a text, from its first characters; what looks like nothing else is read as TLE. */
 export function detectFormat(text: string): SetFormat {
-  if (NAME_AND_LINE_1.test(text)) return "tle";
-  if (/^\s*[{[]/.test(text)) return "omm-json";
-  if (/^\s*</.test(text)) return "omm-xml";
-  if (looksLikeKvn(text)) return "omm-kvn";
-  return looksLikeOmmCsv(text) ? "omm-csv" : "tle";
+  // Blanks first and by themselves: a pattern that skips them and then more would try every split of them.
+  const start = Math.max(0, text.search(/\S/));
+  const head = text.slice(start, start + 2 * MAX_LINE_CHARS);
+  if (NAME_AND_LINE_1.test(head)) return "tle";
+  if (/^[{[]/.test(head)) return "omm-json";
+  if (head.startsWith("<")) return "omm-xml";
+  if (looksLikeKvn(head)) return "omm-kvn";
+  return looksLikeOmmCsv(head) ? "omm-csv" : "tle";
 }
 
 /**
@@ -36,13 +40,14 @@ export function detectFormat(text: string): SetFormat {
  * hides the next good one.
  *
  * Everything accepted is finite, in range, has right checksums where its form has
- * them, and can be propagated to its epoch. A text without any set gives one
- * rejection. At most 100,000 sets are read. Never throws, whatever the text.
+ * them, and can be propagated to its epoch. A text without any set, of more than 32
+ * million characters or of more than a million lines gives one rejection; of more
+ * than 100,000 sets the rest is not read, and that is said. Never throws.
  */
 export function parseElementSets(text: string): ParsedText {
   const body = withoutByteOrderMark(text);
-  if (looksBinary(body))
-    return refused("This is not plain text in UTF-8; save the file as UTF-8 text and try again.");
+  const unreadable = whyUnreadable(body);
+  if (unreadable) return refused(unreadable);
   const result = READERS[detectFormat(body)](body);
   const nothing = result.accepted.length + result.rejected.length === 0;
   return nothing ? refused("The text holds no element set.") : result;
@@ -52,7 +57,15 @@ function refused(message: string): ParsedText {
   return { accepted: [], rejected: [{ line: 1, column: 1, message, raw: "" }] };
 }
 
-/** UTF-16 read as UTF-8 has a NUL at every other place; true text has none among its first characters. */
-function looksBinary(text: string): boolean {
-  return text.slice(0, 4).includes("\0");
+function whyUnreadable(text: string): string | null {
+  if (text.length > MAX_TEXT_CHARS) {
+    return `The text has ${text.length} characters; ${MAX_TEXT_CHARS} can be read at once.`;
+  }
+  if (hasMoreLines(text, MAX_LINES))
+    return `The text has more than ${MAX_LINES} lines; so many can be read at once.`;
+  // UTF-16 read as UTF-8 has a NUL at every other place; true text has none among its first characters.
+  if (text.slice(0, 4).includes("\0")) {
+    return "This is not plain text in UTF-8; save the file as UTF-8 text and try again.";
+  }
+  return null;
 }

@@ -26,8 +26,7 @@ export function rejectionOf(faults: readonly [Fault, ...Fault[]], raw: string): 
   const parts = further
     .slice(0, FURTHER_SHOWN)
     .map((f) => ` Also line ${f.line}, column ${f.column}: ${f.message}`);
-  const unshown = further.length - FURTHER_SHOWN;
-  if (unshown > 0) parts.push(` And ${unshown} more.`);
+  if (further.length > FURTHER_SHOWN) parts.push(" And more.");
   return {
     line: first.line,
     column: first.column,

@@ -1,3 +1,9 @@
+/** Characters a text may have: 100,000 three-line sets have some 17 million. */
+export const MAX_TEXT_CHARS = 32_000_000;
+
+/** Lines a text may have. */
+export const MAX_LINES = 1_000_000;
+
 /** Sets read from one text, good and bad together; what follows is not read, and that is said. */
 export const MAX_SETS = 100_000;
 

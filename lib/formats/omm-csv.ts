@@ -2,7 +2,15 @@ import { quote } from "./faults";
 import { MAX_LINE_CHARS } from "./limits";
 import type { OmmFault, OmmField } from "./omm-fields";
 import { NUMBER_KEYWORDS, READ_KEYWORDS } from "./omm-keywords";
-import { beginReading, type OmmReading, rejectOmm, stopsHere, takeOmm, twiceFault } from "./omm-reading";
+import {
+  beginReading,
+  controlFault,
+  type OmmReading,
+  rejectOmm,
+  stopsHere,
+  takeOmm,
+  twiceFault,
+} from "./omm-reading";
 import type { ParsedText } from "./set-types";
 import { splitLines, type TextLine } from "./text-lines";
 
@@ -17,7 +25,7 @@ type Cells =
 
 /** True when a text begins with a line of OMM keywords between commas. */
 export function looksLikeOmmCsv(text: string): boolean {
-  const head = /^\s*([^\r\n]*)/.exec(text.slice(0, MAX_LINE_CHARS))?.[1] ?? "";
+  const head = /^[^\r\n]*/.exec(text.slice(0, MAX_LINE_CHARS))?.[0] ?? "";
   const names = head.split(",").map((name) => name.trim().replace(/^"(.*)"$/, "$1"));
   return names.length > 3 && names.filter((name) => READ_KEYWORDS.has(name)).length > 2;
 }
@@ -33,7 +41,8 @@ export function parseOmmCsv(text: string): ParsedText {
   const [head, ...rows] = splitLines(text).filter((line) => line.text.trim() !== "");
   if (!head) return reading.result;
   const columns = readCells(head);
-  const faults = columns.ok ? headerFaults(columns.cells, head.start) : [columns.fault];
+  const control = controlFault(head.text, head.start);
+  const faults = control ? [control] : columns.ok ? headerFaults(columns.cells, head.start) : [columns.fault];
   const [fault, ...further] = faults;
   if (!columns.ok || fault) {
     if (fault) rejectOmm(reading, [fault, ...further], text.slice(head.start, head.end));
@@ -63,19 +72,19 @@ function headerFaults(columns: readonly Cell[], offset: number): OmmFault[] {
 }
 
 function takeRow(reading: OmmReading, head: TextLine, keywords: readonly string[], row: TextLine): void {
-  const raw =
-    reading.text.slice(head.start, head.end) + head.lineBreak + reading.text.slice(row.start, row.end);
+  const lead = reading.text.slice(head.start, head.end) + head.lineBreak;
+  const own = reading.text.slice(row.start, row.end);
   const read = readCells(row);
   const fault = read.ok ? lengthFault(read.cells.length, keywords.length, row) : read.fault;
   if (!read.ok || fault) {
-    if (fault) rejectOmm(reading, [fault], raw);
+    if (fault) rejectOmm(reading, [fault], lead + own);
     return;
   }
   const fields = new Map<string, OmmField>();
   for (const [i, cell] of read.cells.entries()) {
     fields.set(keywords[i] ?? "", { text: cell.text, offset: cell.offset, notAValue: null, unit: null });
   }
-  takeOmm(reading, fields, row.start, raw);
+  takeOmm(reading, fields, row.start, own, lead);
 }
 
 function lengthFault(cells: number, columns: number, row: TextLine): OmmFault | null {

@@ -18,9 +18,9 @@ interface OpenSet {
   readonly faults: OmmFault[];
 }
 
-/** True when a text is in keyword-value notation, by its first line that is not blank. */
+/** True when a text is in keyword-value notation, by its first line, which must not be blank. */
 export function looksLikeKvn(text: string): boolean {
-  return /^\s*(?:CCSDS_[A-Z]+_VERS\b(?!\s*,)|COMMENT\s|[A-Z][A-Z0-9_]*[ \t]*=)/.test(text);
+  return /^(?:CCSDS_[A-Z]+_VERS\b(?!\s*,)|COMMENT\s|[A-Z][A-Z0-9_]*[ \t]*=)/.test(text);
 }
 
 /**
@@ -54,10 +54,15 @@ function beginsSet(open: OpenSet, keyword: string): boolean {
 
 function addLine(open: OpenSet, line: TextLine): void {
   const { fields, faults } = open;
-  const found = line.text.length > MAX_LINE_CHARS ? null : LINE.exec(line.text);
+  const tooLong = line.text.length > MAX_LINE_CHARS;
+  const found = tooLong ? null : LINE.exec(line.text);
   if (!found) {
-    const message = `The line ${quote(line.text)} is not of the form KEYWORD = value.`;
-    faults.push({ offset: line.start, message });
+    const problem = tooLong
+      ? `has more than ${MAX_LINE_CHARS} characters`
+      : "is not of the form KEYWORD = value";
+    const message = `The line ${quote(line.text)} ${problem}.`;
+    // A report shows four faults of a set; a file of a million stray lines needs no more of them.
+    if (faults.length <= 4) faults.push({ offset: line.start, message });
     return;
   }
   const [, keyword = "", written = ""] = found;

@@ -1,4 +1,4 @@
-import { fullRejection, isFull, quote, rejectionOf } from "./faults";
+import { codePoint, fullRejection, isFull, quote, rejectionOf } from "./faults";
 import { type OmmFault, type OmmField, readOmm } from "./omm-fields";
 import type { ParsedText, SetFormat } from "./set-types";
 import { makeLocator } from "./text-lines";
@@ -27,19 +27,39 @@ export function rejectOmm(
   reading.result.rejected.push(rejectionOf([placed(first), ...further.map(placed)], raw));
 }
 
-/** Judges one OMM that begins at `offset` and adds it to the accepted or the rejected. */
+/**
+ * Judges one OMM, whose `own` text begins at `offset`, and adds it to the accepted or
+ * the rejected. `lead` is other text that belongs to its raw text, a CSV header.
+ */
 export function takeOmm(
   reading: OmmReading,
   fields: ReadonlyMap<string, OmmField>,
   offset: number,
-  raw: string,
+  own: string,
+  lead = "",
 ): void {
+  const raw = lead + own;
+  const control = controlFault(own, offset);
+  if (control) {
+    rejectOmm(reading, [control], raw);
+    return;
+  }
   const read = readOmm(fields, offset);
   if (!read.ok) rejectOmm(reading, read.faults, raw);
   else {
     const { line } = reading.locate(offset);
     reading.result.accepted.push({ elements: read.elements, format: reading.format, raw, line });
   }
+}
+
+/**
+ * The first control character of a text that begins at `offset`, tab and line breaks
+ * apart. Raw text is kept in a database, which takes no NUL, even where nothing reads it.
+ */
+export function controlFault(text: string, offset: number): OmmFault | null {
+  const odd = /(?![\t\r\n])\p{Cc}/u.exec(text);
+  if (!odd) return null;
+  return { offset: offset + odd.index, message: `The control character ${codePoint(odd[0])} stands here.` };
 }
 
 /** True, with a rejection that says so, when the text has given as many sets as may be read. */

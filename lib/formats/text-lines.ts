@@ -42,10 +42,18 @@ function trimEndOfLine(text: string): string {
   return text.slice(0, end);
 }
 
+/** True when a text has more line breaks than `most`. */
+export function hasMoreLines(text: string, most: number): boolean {
+  const breaks = /\r\n|\n|\r/g;
+  for (let count = 0; count < most; count += 1) if (!breaks.test(text)) return false;
+  return breaks.test(text);
+}
+
 /** Turns an offset into a 1-based line and column (UTF-16 units), by bisection over the line starts. */
 export function makeLocator(text: string): (offset: number) => { line: number; column: number } {
-  const starts = splitLines(text).map((line) => line.start);
-  if (starts.length === 0) starts.push(0);
+  const starts = [0];
+  const breaks = /\r\n|\n|\r/g;
+  while (breaks.test(text)) starts.push(breaks.lastIndex);
   return (offset) => {
     let low = 0;
     let high = starts.length - 1;

@@ -40,8 +40,14 @@ export function rejectUnpaired(group: Exclude<TleGroup, { kind: "pair" }>, text:
       return at(group.second, `Line 2 of object ${numberOf(group.second)} has no line 1 before it.`);
     case "stray": {
       const [first, ...further] = group.lines;
-      const more = further.length > 0 ? ` So do the ${further.length} lines after it.` : "";
-      return at(first, `The text ${quote(first.text)} belongs to no element set.${more}`);
+      const more =
+        further.length === 1
+          ? " Nor does the line after it."
+          : ` Nor do the ${further.length} lines after it.`;
+      return at(
+        first,
+        `The text ${quote(first.text)} belongs to no element set.${further.length > 0 ? more : ""}`,
+      );
     }
   }
 }

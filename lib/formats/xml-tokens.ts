@@ -1,5 +1,5 @@
 import { quote } from "./faults";
-import { MAX_LINE_CHARS } from "./limits";
+import { MAX_ITEM_CHARS, MAX_LINE_CHARS } from "./limits";
 
 /** Thrown inside this folder only: the place at which a text stops being XML of the kind that is read. */
 export class XmlFault extends Error {
@@ -85,7 +85,9 @@ function readTag(text: string, offset: number): XmlToken {
 function readText(text: string, offset: number): XmlToken {
   const tag = text.indexOf("<", offset);
   const end = tag < 0 ? text.length : tag;
-  const resolved = resolve(text.slice(offset, end), offset);
+  const written = text.slice(offset, end);
+  // Longer than any omm element may be: it will be refused, or stands outside and means nothing.
+  const resolved = written.length > MAX_ITEM_CHARS ? written : resolve(written, offset);
   return { kind: "text", name: "", attributes: new Map(), text: resolved, offset, end };
 }
 

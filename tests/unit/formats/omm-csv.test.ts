@@ -46,6 +46,7 @@ describe("bad OMMs in CSV", () => {
   it.each<[string, string, number, RegExp]>([
     ["a value out of range", row({ ECCENTRICITY: 1.5 }), 61, /eccentricity is 1.5/],
     ["an empty value", row({ EPOCH: "" }), 22, /EPOCH has no value/],
+    ["a control character", row({ REV_AT_EPOCH: "1\u0007" }), 117, /control character U\+0007/],
     ["a value too few", row().replace(",999", ""), 1, /row has 16 values; the header has 17/],
     [
       "a quote in the wrong place",
@@ -71,6 +72,7 @@ describe("bad OMMs in CSV", () => {
   it.each<[string, string, RegExp]>([
     ["lacks a column", HEAD.replace("EPOCH", "TIME"), /^The header has no column EPOCH\.$/],
     ["names a column twice", HEAD.replace("EPHEMERIS_TYPE", "EPOCH"), /keyword "EPOCH" comes twice/],
+    ["holds a control character", `${HEAD}\0`, /control character U\+0000/],
     ["has a broken quote", HEAD.replace("EPHEMERIS_TYPE", 'A"B'), /quote in the wrong place/],
   ])("are refused as a whole when the header %s", (_what, head, message) => {
     const { accepted, rejected } = parseElementSets(`${head}\n${row()}\n${row()}\n`);

@@ -116,6 +116,7 @@ describe("a bad OMM in XML", () => {
     ["a numbered entity", omm({ OBJECT_NAME: "&#65;" }), 4, 14, /entity "&#65;" is not read/],
     ["a bare ampersand", omm({ OBJECT_NAME: "A & B" }), 4, 16, /entity "&" is not read/],
     ["text among elements", omm({ EPOCH: "2020-10-13T04:52:48<A/>.5" }), 7, 8, /stands among elements/],
+    ["a control character", omm({ REV_AT_EPOCH: "1\0" }), 19, 16, /control character U\+0000/],
     ["a processing instruction", omm({ OBJECT_NAME: "<?php x ?>" }), 4, 14, /processing instruction/],
     [
       "its end missing",

@@ -57,7 +57,7 @@ describe("one bad set never hides the next good one", () => {
     const { rejected } = outcome("alpha", "beta", "gamma");
     expect(rejected).toHaveLength(1);
     expect(rejected[0]?.message).toBe(
-      'The text "alpha" belongs to no element set. So do the 2 lines after it.',
+      'The text "alpha" belongs to no element set. Nor do the 2 lines after it.',
     );
     expect(rejected[0]?.raw).toBe("alpha\nbeta\ngamma");
   });
@@ -86,6 +86,22 @@ describe("limits", () => {
       message: "A file may hold 100000 sets; nothing from here on was read.",
       raw: "",
     });
+  });
+});
+
+describe("a text that is too much at once", () => {
+  it.each<[string, string, RegExp]>([
+    [
+      "characters",
+      " ".repeat(32_000_001),
+      /^The text has 32000001 characters; 32000000 can be read at once\.$/,
+    ],
+    ["lines", "\r\n".repeat(1_000_001), /^The text has more than 1000000 lines/],
+  ])("for its %s is refused as a whole", (_what, text, message) => {
+    const { accepted, rejected } = parseElementSets(text);
+    expect(accepted).toEqual([]);
+    expect(rejected).toHaveLength(1);
+    expect(rejected[0]?.message).toMatch(message);
   });
 });
 
