@@ -27,7 +27,9 @@ export function ImportForm() {
     if (!file) return;
     setReport(null);
     if (file.size > MOST_BYTES) {
-      setError(new Error(`${file.name} has ${Math.ceil(file.size / 1048576)} MB; at most 10 MB are read at once.`));
+      setError(
+        new Error(`${file.name} has ${Math.ceil(file.size / 1048576)} MB; at most 10 MB are read at once.`),
+      );
       return;
     }
     setError(null);
@@ -54,7 +56,10 @@ export function ImportForm() {
       <Section title="Element sets" intro="TLE with or without name lines, or OMM as JSON, KVN, XML or CSV.">
         <div className="grid gap-4">
           <DropBox onFile={(file) => void take(file)} source={source} />
-          <Field label="Or paste them here" hint={source ? `Now: ${source}` : "Nothing leaves this page before you ask"}>
+          <Field
+            label="Or paste them here"
+            hint={source ? `Now: ${source}` : "Nothing leaves this page before you ask"}
+          >
             {(control) => (
               <textarea
                 {...control}
@@ -95,7 +100,9 @@ export function ImportForm() {
               busy={busy === "commit"}
               onClick={() => void send(false)}
             >
-              {report?.preview ? `Store ${report.accepted} good ${report.accepted === 1 ? "set" : "sets"}` : "Store the good sets"}
+              {report?.preview
+                ? `Store ${report.accepted} good ${report.accepted === 1 ? "set" : "sets"}`
+                : "Store the good sets"}
             </Button>
           </div>
           <ErrorNote
@@ -153,7 +160,11 @@ function DropBox(props: { readonly onFile: (file: File | undefined) => void; rea
 function Afterwards({ report }: { readonly report: ImportReportBody }) {
   return (
     <Section title="What follows">
-      {report.sweepId ? <SweepProgress sweepId={report.sweepId} /> : <p>Nothing newer came in, so nothing is swept.</p>}
+      {report.sweepId ? (
+        <SweepProgress sweepId={report.sweepId} />
+      ) : (
+        <p>Nothing newer came in, so nothing is swept.</p>
+      )}
       <p className="mt-3">
         <Link className="link" href="/passes">
           Look at the passes

@@ -10,14 +10,27 @@ export function ImportReport({ report, text }: { readonly report: ImportReportBo
       intro={report.preview ? "Nothing is stored yet." : undefined}
     >
       <p role="status" className="text-base">
-        <strong>{count(report.accepted, "set")}</strong> {verb}, {count(report.rejected.length, "set")} refused,{" "}
-        {count(report.duplicates.length, "duplicate")}, {report.older.length} older than what is known.
+        <strong>{count(report.accepted, "set")}</strong> {verb}, {count(report.rejected.length, "set")}{" "}
+        refused, {count(report.duplicates.length, "duplicate")}, {report.older.length} older than what is
+        known.
         {report.created.length > 0 ? ` New to the book: ${namesOf(report)}.` : ""}
       </p>
-      <Lines title="Refused" rows={report.rejected.map((r) => ({ ...r, where: `line ${r.line}, column ${r.column}` }))} text={text} />
-      <Lines title="Already stored" rows={report.duplicates.map((r) => ({ ...r, where: `line ${r.line}` }))} text={null} />
       <Lines
-        title={report.preview ? "Older than the newest set of their object" : "Stored, but older than the newest set of their object"}
+        title="Refused"
+        rows={report.rejected.map((r) => ({ ...r, where: `line ${r.line}, column ${r.column}` }))}
+        text={text}
+      />
+      <Lines
+        title="Already stored"
+        rows={report.duplicates.map((r) => ({ ...r, where: `line ${r.line}` }))}
+        text={null}
+      />
+      <Lines
+        title={
+          report.preview
+            ? "Older than the newest set of their object"
+            : "Stored, but older than the newest set of their object"
+        }
         rows={report.older.map((r) => ({ ...r, where: `line ${r.line}` }))}
         text={null}
       />
@@ -31,7 +44,9 @@ function count(n: number, word: string): string {
 
 function namesOf(report: ImportReportBody): string {
   const names = report.created.map((c) => c.name);
-  return names.length <= 6 ? names.join(", ") : `${names.slice(0, 6).join(", ")} and ${names.length - 6} more`;
+  return names.length <= 6
+    ? names.join(", ")
+    : `${names.slice(0, 6).join(", ")} and ${names.length - 6} more`;
 }
 
 interface LineRow {
@@ -40,7 +55,11 @@ interface LineRow {
   readonly where: string;
 }
 
-function Lines(props: { readonly title: string; readonly rows: readonly LineRow[]; readonly text: string | null }) {
+function Lines(props: {
+  readonly title: string;
+  readonly rows: readonly LineRow[];
+  readonly text: string | null;
+}) {
   if (props.rows.length === 0) return null;
   const lines = props.text?.split(/\r\n|\n|\r/) ?? null;
   return (

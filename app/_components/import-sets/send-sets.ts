@@ -30,8 +30,11 @@ export async function sendSets(args: {
   }
   const form = new FormData();
   form.set("file", new File([args.text], args.source, { type: "text/plain" }));
-  const response = await fetch(`/api/element-sets?${query}`, { method: "POST", body: form }).catch(() => null);
-  if (response === null) throw new FetchError(0, "unreachable", "The server can't be reached. Nothing was stored.");
+  const response = await fetch(`/api/element-sets?${query}`, { method: "POST", body: form }).catch(
+    () => null,
+  );
+  if (response === null)
+    throw new FetchError(0, "unreachable", "The server can't be reached. Nothing was stored.");
   const body: unknown = await response.json().catch(() => null);
   if (isReport(body)) return body;
   const error = (body as ErrorBody | null)?.error;

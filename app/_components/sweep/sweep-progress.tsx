@@ -55,6 +55,7 @@ function wordsOf(sweep: SweepBody): string {
   const passes = `${numberText(sweep.passCount)} ${sweep.passCount === 1 ? "pass" : "passes"}`;
   const lost = failed > 0 ? `, ${failed} could not be worked out` : "";
   if (sweep.state === "cancelled") return `The sweep was cancelled after ${done} of ${total} fragments.`;
-  if (sweep.state === "done") return `Swept ${done} of ${total} fragments over all stations: ${passes} in seven days${lost}.`;
+  if (sweep.state === "done")
+    return `Swept ${done} of ${total} fragments over all stations: ${passes} in seven days${lost}.`;
   return `Sweeping: ${done} of ${total} fragments, ${passes} so far${lost}.`;
 }
