@@ -1,0 +1,113 @@
+import { type NewTokenBody, passwordInput, type TokenBody, tokenInput } from "./account";
+import type { HealthBody } from "./health";
+import { type ApiRoute, json } from "./openapi-route";
+import { endSessionsInput, type PersonBody, personChangeInput } from "./people";
+
+/** One's own account, other people, and the service itself. */
+export const PEOPLE: readonly ApiRoute[] = [
+  {
+    method: "get",
+    path: "/api/account/tokens",
+    tag: "account",
+    summary: "The caller's live access tokens.",
+    gives: json<{ tokens: TokenBody[] }>()("Tokens, newest first; never the tokens themselves.", "tokens"),
+  },
+  {
+    method: "post",
+    path: "/api/account/tokens",
+    tag: "account",
+    summary: "Makes an access token that can do what its owner can. It is shown in this answer alone.",
+    body: tokenInput,
+    gives: json<NewTokenBody>(201)("The token.", "id", "label", "token"),
+    refusals: [422],
+  },
+  {
+    method: "delete",
+    path: "/api/account/tokens/{id}",
+    tag: "account",
+    summary: "Revokes one of the caller's own tokens at once.",
+    gives: json<{ revoked: boolean }>()("Done.", "revoked"),
+    refusals: [404],
+  },
+  {
+    method: "post",
+    path: "/api/account/password",
+    tag: "account",
+    summary: "Changes the caller's password and ends all their sessions. Not with a token.",
+    body: passwordInput,
+    gives: json<{ changed: boolean }>()("Done.", "changed"),
+    refusals: [422, 429],
+  },
+  {
+    method: "post",
+    path: "/api/account/end-sessions",
+    tag: "account",
+    summary: "Ends all sessions of the caller.",
+    gives: json<{ ended: boolean }>()("Done.", "ended"),
+  },
+  {
+    method: "post",
+    path: "/api/calendar",
+    tag: "account",
+    summary: "Makes a new secret calendar address for the caller; a former one is dead at once.",
+    gives: json<{ url: string }>(201)("The address, shown this once.", "url"),
+  },
+  {
+    method: "delete",
+    path: "/api/calendar",
+    tag: "account",
+    summary: "Ends the caller's calendar address.",
+    gives: { status: 204, words: "Ended." },
+  },
+  {
+    method: "get",
+    path: "/api/calendar/{file}",
+    tag: "account",
+    summary: "`<secret>.ics`: what the address's owner may read of the book, as a calendar.",
+    open: true,
+    gives: { status: 200, words: "The calendar.", mediaType: "text/calendar" },
+    refusals: [404],
+  },
+  {
+    method: "get",
+    path: "/api/people",
+    tag: "people",
+    summary: "Everybody with a sign-in. For administrators.",
+    gives: json<{ people: PersonBody[] }>()("People, active ones first.", "people"),
+  },
+  {
+    method: "patch",
+    path: "/api/people/{id}",
+    tag: "people",
+    summary: "Changes role, authority, safety duty or activity, with a reason. For administrators.",
+    body: personChangeInput,
+    gives: json<PersonBody>()("The person.", "id", "role", "active"),
+    refusals: [404, 422],
+  },
+  {
+    method: "post",
+    path: "/api/people/{id}/end-sessions",
+    tag: "people",
+    summary: "Ends all sessions of a person, with a reason. For administrators.",
+    body: endSessionsInput,
+    gives: json<{ ended: boolean }>()("Done.", "ended"),
+    refusals: [404, 422],
+  },
+  {
+    method: "get",
+    path: "/api/health",
+    tag: "service",
+    summary: "ok only when the database, a worker and the mail server answer; else 503 with the same body.",
+    open: true,
+    gives: json<HealthBody>()("Health.", "status", "database", "workers", "mail"),
+    refusals: [503],
+  },
+  {
+    method: "get",
+    path: "/api/openapi.json",
+    tag: "service",
+    summary: "This description.",
+    open: true,
+    gives: { status: 200, words: "OpenAPI 3.1.", fields: ["openapi", "info", "paths"] },
+  },
+];
