@@ -6,6 +6,7 @@ import { ThemeSwitch } from "@/app/_components/theme-switch";
 import { requirePerson } from "@/app/_server/require-person";
 import { RIGHTS } from "@/lib/engagement/roles";
 import { listTokens } from "@/lib/services/tokens";
+import { CalendarLink } from "./calendar-link";
 import { PasswordForm } from "./password-form";
 import { SessionsForm } from "./sessions-form";
 import { TokenList } from "./token-list";
@@ -23,7 +24,10 @@ export default async function AccountPage() {
         .
       </PageHeader>
       <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,3fr)_minmax(20rem,2fr)]">
-        <TokenList initial={tokens} />
+        <div className="grid min-w-0 gap-5">
+          <TokenList initial={tokens} />
+          <CalendarLink />
+        </div>
         <div className="grid gap-5">
           <Section title="Theme" intro="Red is for eyes used to the dark: it lights no green and no blue.">
             <ThemeSwitch initial={themeOf(jar.get("dwellbook.theme")?.value)} />

@@ -11,7 +11,7 @@ import { errorOf, Field } from "@/app/_components/field";
 import { Section } from "@/app/_components/section";
 import { UtcTime } from "@/app/_components/utc-time";
 import type { NewTokenBody, TokenBody } from "@/lib/contracts/account";
-import { NewToken } from "./new-token";
+import { ShownOnce } from "./shown-once";
 
 const PATH = "/api/account/tokens";
 
@@ -62,7 +62,14 @@ export function TokenList({ initial }: { readonly initial: readonly TokenBody[] 
         <Button type="submit">Make a token</Button>
       </form>
       {error && !labelError ? <ErrorNote error={error} /> : null}
-      {made ? <NewToken made={made} onDone={() => setMade(null)} /> : null}
+      {made ? (
+        <ShownOnce
+          title={`The token for “${made.label}”`}
+          label="New token"
+          secret={made.token}
+          onDone={() => setMade(null)}
+        />
+      ) : null}
       <Tokens tokens={data?.tokens ?? []} onRevoke={revoke} />
     </Section>
   );
