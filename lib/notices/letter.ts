@@ -72,6 +72,7 @@ function openingOf(facts: NoticeFacts): string[] {
       ];
     case "revised request":
       return [
+        `What has changed: ${facts.change ?? "the request as a whole"}.`,
         "The request you had for this dwell no longer holds. Any answer to it is void: please answer again.",
         `${facts.authority.name} is concerned because ${facts.because}.`,
       ];

@@ -55,6 +55,8 @@ export interface NoticeFacts {
   /** Null when the orbit gives no direction; the notice says so. */
   readonly beam: BeamSpan | null;
   readonly planner: { readonly name: string; readonly email: string };
+  /** What a revised request changes, in words. */
+  readonly change: string | null;
   /** Reason of a scrub or lapse. */
   readonly reason: string | null;
   readonly fired: FiredFacts | null;

@@ -64,41 +64,44 @@ interface Move {
   readonly nowMs: number;
 }
 
-async function move(tx: Transaction, { locked, actor, facts, dwell, nowMs }: Move): Promise<void> {
+async function move(tx: Transaction, args: Move): Promise<void> {
+  const { locked, facts, dwell, nowMs } = args;
   const { engagement, station } = locked;
-  const before: Interval = { fromMs: engagement.dwellFrom.getTime(), toMs: engagement.dwellTo.getTime() };
   await refuseWhenHeld(tx, station, { fragmentId: engagement.fragmentId, dwell, exceptId: engagement.id });
   const decision = decide(factsOfRow(engagement), "move", { ...facts, newFromMs: dwell.fromMs }, nowMs);
   // What was answered was said of other times: it neither stands in the way nor helps.
   const voided = await voidAnswersOfEngagement(tx, engagement.id, "the dwell was moved", nowMs);
-  const judgement = await judgeDwell(tx, {
-    passId: engagement.passId,
-    ...dwell,
-    nowMs,
-    engagementId: engagement.id,
-  });
+  const { id: engagementId, passId } = engagement;
+  const judgement = await judgeDwell(tx, { passId, ...dwell, nowMs, engagementId });
   const next = permit(decision, "The move", reasonsAgainst(judgement));
-  const names = await voidConfirmations(tx, engagement.id, nowMs);
-  const changed = await changeEngagement(
-    tx,
-    engagement.id,
-    {
-      state: next,
-      dwellFrom: new Date(dwell.fromMs),
-      dwellTo: new Date(dwell.toMs),
-      effect: acceptedEffect(judgement, engagement.effect.aim),
-      elementSetId: judgement.elementSetId,
-      laserSettingId: judgement.laserSettingId,
-      calendarSequence: engagement.calendarSequence + 1,
-    },
-    nowMs,
-  );
-  const members = await revisedRound(tx, engagement.id, judgement);
+  const names = await voidConfirmations(tx, engagementId, nowMs);
+  const changes = {
+    state: next,
+    dwellFrom: new Date(dwell.fromMs),
+    dwellTo: new Date(dwell.toMs),
+    effect: acceptedEffect(judgement, engagement.effect.aim),
+    elementSetId: judgement.elementSetId,
+    laserSettingId: judgement.laserSettingId,
+    calendarSequence: engagement.calendarSequence + 1,
+  };
+  const changed = await changeEngagement(tx, engagementId, changes, nowMs);
+  await tellMove(tx, args, changed, judgement, { answersVoided: voided.length, confirmationsVoided: names });
+}
+
+/** Revised notices and the ledger's row. */
+async function tellMove(
+  tx: Transaction,
+  { locked: { engagement }, actor, nowMs }: Move,
+  changed: EngagementRow,
+  judgement: Judgement,
+  voided: Record<string, number>,
+): Promise<void> {
   const notices = await raiseNotices(tx, {
     engagementId: engagement.id,
-    members,
+    members: await revisedRound(tx, engagement.id, judgement),
     reason: "The dwell was moved to times that no longer concern you.",
-    former: before,
+    change: "the times of the dwell",
+    former: { fromMs: engagement.dwellFrom.getTime(), toMs: engagement.dwellTo.getTime() },
     nowMs,
   });
   await writeLedger(tx, actor, {
@@ -107,7 +110,7 @@ async function move(tx: Transaction, { locked, actor, facts, dwell, nowMs }: Mov
     subjectId: engagement.id,
     subjectLabel: `E-${engagement.number}`,
     oldValues: spanValues(engagement),
-    newValues: { ...spanValues(changed), notices, answersVoided: voided.length, confirmationsVoided: names },
+    newValues: { ...spanValues(changed), notices, ...voided },
   });
 }
 

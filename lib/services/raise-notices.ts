@@ -23,7 +23,10 @@ export interface RoundMember {
 export interface Round {
   readonly engagementId: string;
   readonly members: readonly RoundMember[];
+  /** Why it ends, for cancellations. */
   readonly reason?: string | null;
+  /** What changed, for revised requests. */
+  readonly change?: string | null;
   readonly fired?: FiredFacts | null;
   /** The times that no longer hold, after a move. */
   readonly former?: Interval | null;
@@ -94,6 +97,7 @@ function factsFor(
     because,
     formerFromMs: kind === "revised request" ? (round.former?.fromMs ?? null) : null,
     formerToMs: kind === "revised request" ? (round.former?.toMs ?? null) : null,
+    change: round.change ?? null,
     reason: round.reason ?? null,
     fired: round.fired ?? null,
     answerByMs: asks ? answerByMs(round.nowMs, common.dwellFromMs, authority.changeDeadlineMin) : null,

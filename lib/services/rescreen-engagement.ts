@@ -99,7 +99,8 @@ async function askAnew(
   if (laserChanged) await voidAnswersOfEngagement(tx, engagement.id, reason, nowMs);
   const calendarSequence = engagement.calendarSequence + 1;
   const changed = await changeEngagement(tx, engagement.id, { calendarSequence }, nowMs);
-  const notices = await raiseNotices(tx, { engagementId: engagement.id, members, reason, nowMs });
+  const round = { members, reason, change: "the laser setting", nowMs };
+  const notices = await raiseNotices(tx, { engagementId: engagement.id, ...round });
   await writeLedger(tx, SYSTEM, {
     action: "asked anew about engagement",
     subjectKind: "engagement",

@@ -35,9 +35,6 @@ export function ownDatabase(): () => TestDatabase {
   };
 }
 
-/** The same under a name that the linter takes for a React hook; new tests call {@link ownDatabase}. */
-export const useTestDatabase = ownDatabase;
-
 /** Runs `work` on a connection of its own and closes it. */
 export async function withClient<T>(url: string, work: (client: Client) => Promise<T>): Promise<T> {
   const client = new Client({ connectionString: url });

@@ -59,7 +59,7 @@ describe("confirming", () => {
     const again = await refusalOf(confirmEngagement(scene.operator, id, good, NOW));
     expect(again.status).toBe(422);
     expect(again.message).toContain("Two different people confirm");
-    const second = await confirmEngagement(scene.safetyOfficer, id, good, NOW);
+    const second = await confirmEngagement(scene.safetyOfficer, id, good, NOW + 1000);
     expect(second.state).toBe("confirmed");
     const sheet = await engagementSheet(scene.operator, id, NOW);
     expect(sheet.confirmations.map(({ capacity }) => capacity)).toEqual(["operator", "safety officer"]);

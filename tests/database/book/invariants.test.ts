@@ -1,4 +1,4 @@
-import { eq, sql } from "drizzle-orm";
+import { eq } from "drizzle-orm";
 import { beforeAll, describe, expect, it } from "vitest";
 import { database, type Queryable } from "@/db/client";
 import { databaseFault, isOverlap } from "@/db/errors";
@@ -6,11 +6,11 @@ import { confirmations, engagements } from "@/db/schema/engagements";
 import { inTransaction } from "@/db/transaction";
 import { STATES } from "@/lib/engagement/states";
 import { TRANSITIONS } from "@/lib/engagement/transitions";
-import { SYSTEM, writeLedger } from "@/lib/services/ledger";
-import { ownDatabase, withClient } from "../support";
+import { faultOf } from "../faults";
+import { ownDatabase } from "../support";
 import { addFragment, addPass, addPerson, addStation, HOUR, NOW, only } from "../world";
 
-const testDatabase = ownDatabase();
+ownDatabase();
 
 interface Place {
   readonly stationId: string;
@@ -81,14 +81,6 @@ async function insert(q: Queryable, place: Place, baseMs: number, afterS: number
     effect: EFFECT,
   };
   return only(await q.insert(engagements).values(row).returning());
-}
-
-async function faultOf(work: Promise<unknown>) {
-  const error = await work.then(
-    () => null,
-    (thrown: unknown) => thrown,
-  );
-  return databaseFault(error);
 }
 
 describe("no two live engagements", () => {
@@ -244,40 +236,5 @@ describe("the database's own guard of transitions", () => {
     );
     await addNames(database(), row.id, operators.slice(1));
     expect(await fault()).toBeNull();
-  });
-});
-
-describe("the ledger", () => {
-  beforeAll(() =>
-    inTransaction((tx) =>
-      writeLedger(tx, SYSTEM, {
-        action: "tested",
-        subjectKind: "test",
-        subjectId: null,
-        subjectLabel: "a row",
-      }),
-    ),
-  );
-
-  const CHANGES = ["UPDATE ledger SET action = 'x'", "DELETE FROM ledger", "TRUNCATE ledger"];
-  for (const change of CHANGES) {
-    it(`refuses ${change.split(" ")[0]} by the application role and by the owner`, async () => {
-      for (const url of [testDatabase().url, testDatabase().ownerUrl]) {
-        const fault = await faultOf(withClient(url, (client) => client.query(change)));
-        expect(fault?.code).toBe("42501");
-      }
-    });
-  }
-
-  it("still holds its row", async () => {
-    const result = await database().execute(sql`select actor_name, action from ledger`);
-    expect(result.rows).toEqual([{ actor_name: "the book", action: "tested" }]);
-  });
-
-  it("cannot be rid of its guard by the application role", async () => {
-    const drop = withClient(testDatabase().url, (client) =>
-      client.query("DROP TRIGGER ledger_append_only ON ledger"),
-    );
-    expect((await faultOf(drop))?.code).toBe("42501");
   });
 });

@@ -1,23 +1,14 @@
-import { eq, sql } from "drizzle-orm";
+import { sql } from "drizzle-orm";
 import { afterEach, beforeAll, beforeEach, describe, expect, it } from "vitest";
-import { database } from "@/db/client";
-import { elementSets } from "@/db/schema/objects";
-import { passes } from "@/db/schema/passes";
 import { answerNotice } from "@/lib/services/answer-notice";
-import { engagementSheet } from "@/lib/services/engagement-sheet";
-import { lapseEngagements } from "@/lib/services/lapse-engagements";
-import { listEngagements } from "@/lib/services/list-engagements";
 import { moveEngagement } from "@/lib/services/move-engagement";
-import { recordFiring } from "@/lib/services/record-firing";
-import { rescreenEngagement } from "@/lib/services/rescreen-engagement";
 import { scrubEngagement } from "@/lib/services/scrub-engagement";
 import { ownDatabase } from "../support";
-import { elementSetRow, HOUR, NOW, only } from "../world";
+import { NOW } from "../world";
 import {
   bookIn,
   clearAll,
   confirmAll,
-  ledgerOf,
   noticesOf,
   openRequest,
   refusalOf,
@@ -43,8 +34,6 @@ afterEach(async () => {
   if (["proposed", "cleared", "confirmed"].includes(String(await stateOf(id)))) {
     await scrubEngagement(scene.planner, id, { reason: "test over" }, NOW);
   }
-  // A firing leaves the fragment's later passes pending: the next test starts without it.
-  await database().execute(sql`delete from firing_records`);
 });
 
 const dwellMs = () => Date.parse(dwellIn(scene.pass).from);
@@ -139,157 +128,3 @@ describe("moving", () => {
     expect(await noticesOf(id, scene.clearing.id)).toHaveLength(1);
   });
 });
-
-describe("scrubbing", () => {
-  it("needs a reason and the right: own planner or any operator, from any live state", async () => {
-    const reason = { reason: "cloud" };
-    for (const person of [scene.otherPlanner, scene.coordinator, scene.administrator, scene.safetyOfficer]) {
-      expect(await statusOf(scrubEngagement(person, id, reason, NOW))).toBe(403);
-    }
-    expect(await statusOf(scrubEngagement(scene.operator, id, {}, NOW))).toBe(422);
-    await clearAll(scene, id);
-    await confirmAll(scene, id);
-    const body = await scrubEngagement(scene.operator, id, reason, NOW);
-    expect(body).toMatchObject({ state: "scrubbed", endReason: "cloud" });
-    for (const authority of [scene.clearing, scene.airUnit]) {
-      expect((await noticesOf(id, authority.id)).at(-1)).toBe("1 cancellation (CANCEL)");
-    }
-    const [mail] = await rowsOf(sql`
-      select text_body, calendar_body from notices where engagement_id = ${id} and kind = 'cancellation' limit 1`);
-    expect(mail?.text_body).toContain("Reason: cloud");
-    expect(mail?.calendar_body).toContain(`UID:${id}@dwellbook.invalid`);
-    expect(await statusOf(scrubEngagement(scene.operator, id, reason, NOW))).toBe(422);
-    expect((await bookIn(scene)).state).toBe("proposed");
-    await scrubEngagement(
-      scene.operator,
-      (await listEngagements(scene.planner, { state: "proposed" }, NOW)).engagements[0]?.id ?? "",
-      reason,
-      NOW,
-    );
-  });
-});
-
-describe("lapsing", () => {
-  it("ends a proposal at its earliest missing answer, with cancellations, and nothing before", async () => {
-    // Brume Air Unit's answer is needed 60 minutes before the dwell, Tessel's 20.
-    const due = dwellMs() - 60 * 60_000;
-    expect(await lapseEngagements(due - 1000)).toBe(0);
-    expect(await lapseEngagements(due)).toBe(1);
-    const sheet = await engagementSheet(scene.planner, id, due);
-    expect(sheet).toMatchObject({ state: "lapsed" });
-    expect(sheet.endReason).toMatch(/^No answer from Brume Air Unit by 2031-/);
-    expect((await noticesOf(id, scene.clearing.id)).at(-1)).toBe("1 cancellation (CANCEL)");
-    expect((await ledgerOf(id)).at(-1)).toBe("the book: let engagement lapse");
-    expect(await lapseEngagements(due)).toBe(0);
-  });
-
-  it("waits for the next deadline once the earliest is met", async () => {
-    const request = await openRequest(id, scene.airUnit.id);
-    await answerNotice(scene.airCoordinator, request.id, { outcome: "no objection" }, NOW);
-    expect(await lapseEngagements(dwellMs() - 60 * 60_000)).toBe(0);
-    expect(await lapseEngagements(dwellMs() - 20 * 60_000)).toBe(1);
-  });
-
-  it("ends what is cleared but not confirmed when the dwell begins; a confirmed one stays, overdue a day later", async () => {
-    await clearAll(scene, id);
-    expect(await lapseEngagements(dwellMs() - 1000)).toBe(0);
-    expect(await lapseEngagements(dwellMs())).toBe(1);
-    expect(await stateOf(id)).toBe("lapsed");
-    id = (await bookIn(scene)).id;
-    await clearAll(scene, id);
-    await confirmAll(scene, id);
-    expect(await lapseEngagements(dwellMs() + 100 * HOUR)).toBe(0);
-    const list = await listEngagements(scene.operator, { state: "confirmed" }, dwellMs() + 25 * HOUR);
-    expect(list.engagements).toMatchObject([{ id, overdue: true }]);
-  });
-});
-
-describe("recording a firing", () => {
-  const record = () => ({
-    outcome: "fired",
-    openedAt: dwellIn(scene.pass).from,
-    closedAt: dwellIn(scene.pass).to,
-    pulses: 400,
-    interruptions: [{ at: new Date(dwellMs() + 5000).toISOString(), cause: "aircraft", secondsLost: 0.5 }],
-  });
-  const soonMs = () => dwellMs() + 600_000;
-
-  it("is an operator's, of what is confirmed, after the dwell began", async () => {
-    expect(await statusOf(recordFiring(scene.planner, id, record(), soonMs()))).toBe(403);
-    expect(await statusOf(recordFiring(scene.operator, id, record(), soonMs()))).toBe(422);
-    await clearAll(scene, id);
-    await confirmAll(scene, id);
-    expect(await statusOf(recordFiring(scene.operator, id, record(), dwellMs() - 1))).toBe(422);
-    const bad = { ...record(), openedAt: null, pulses: null };
-    const refusal = await refusalOf(recordFiring(scene.operator, id, bad, soonMs()));
-    expect(refusal.reasons.map(({ path }) => path)).toEqual(["openedAt", "pulses"]);
-    const body = await recordFiring(scene.operator, id, record(), soonMs());
-    expect(body.state).toBe("fired");
-    const sheet = await engagementSheet(scene.planner, id, soonMs());
-    // 400 pulses of 20 kJ.
-    expect(sheet.firing).toMatchObject({
-      outcome: "fired",
-      pulses: 400,
-      deliveredEnergyJ: 8e6,
-      recordedBy: "Op One",
-    });
-    expect((await noticesOf(id, scene.clearing.id)).at(-1)).toBe("1 completion (PUBLISH)");
-    expect(await statusOf(recordFiring(scene.operator, id, record(), soonMs()))).toBe(422);
-  });
-
-  it("that says not fired takes no times, and tells the authorities so", async () => {
-    await clearAll(scene, id);
-    await confirmAll(scene, id);
-    const none = { outcome: "not fired", note: "aircraft in the way throughout" };
-    const wrong = { ...none, openedAt: dwellIn(scene.pass).from };
-    expect(await statusOf(recordFiring(scene.operator, id, wrong, soonMs()))).toBe(422);
-    expect((await recordFiring(scene.operator, id, none, soonMs())).state).toBe("fired");
-    const [mail] = await rowsOf(sql`
-      select text_body from notices where engagement_id = ${id} and kind = 'completion' limit 1`);
-    expect(mail?.text_body).toContain("Nothing was fired");
-  });
-
-  // Last in this file: the newer element set stays.
-  it("leaves the fragment's other engagements pending until a newer element set has come", async () => {
-    const next = await bookIn(scene, scene.laterPass);
-    await clearAll(scene, next.id);
-    expect(await stateOf(next.id)).toBe("cleared");
-    await clearAll(scene, id);
-    await confirmAll(scene, id);
-    await database().execute(sql`delete from graphile_worker._private_jobs`);
-    await recordFiring(scene.operator, id, record(), soonMs());
-    const jobs = await rowsOf(sql`
-      select payload from graphile_worker._private_jobs j join graphile_worker._private_tasks t on t.id = j.task_id
-      where t.identifier = 'rescreen-engagement'`);
-    expect(jobs).toEqual([{ payload: { engagementId: next.id } }]);
-    await rescreenEngagement(next.id, soonMs());
-    expect(await stateOf(next.id)).toBe("proposed");
-    const fresh = await freshElements(soonMs() + 300_000);
-    await rescreenEngagement(next.id, soonMs() + 600_000);
-    expect(await stateOf(next.id)).toBe("cleared");
-    const [row] = await rowsOf(sql`select element_set_id from engagements where id = ${next.id}`);
-    expect(row).toEqual({ element_set_id: fresh });
-    await scrubEngagement(scene.planner, next.id, { reason: "test over" }, NOW);
-  });
-});
-
-/** A newer element set of the same orbit, and the later pass worked out from it, as a sweep would leave it. */
-async function freshElements(epochMs: number): Promise<string> {
-  const old = elementSetRow(88_001, {});
-  // The same mean motion carried on: the anomaly advances with it, the other elements stay.
-  const turned = old.meanMotionRevPerDay * ((epochMs - old.epochMs) / 86_400_000) * 360;
-  const set = only(
-    await database()
-      .insert(elementSets)
-      .values({
-        ...old,
-        fragmentId: scene.fragment.id,
-        epochMs,
-        epochAt: new Date(epochMs),
-        meanAnomalyDeg: (old.meanAnomalyDeg + turned) % 360,
-      })
-      .returning(),
-  );
-  await database().update(passes).set({ elementSetId: set.id }).where(eq(passes.id, scene.laterPass.id));
-  return set.id;
-}

@@ -1,62 +1,28 @@
 import { sql } from "drizzle-orm";
-import { type AddressObject, type ParsedMail, simpleParser } from "mailparser";
-import { SMTPServer } from "smtp-server";
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from "vitest";
 import { database } from "@/db/client";
-import { inTransaction } from "@/db/transaction";
 import { sendNoticeTask } from "@/lib/jobs/tasks/send-notice";
 import { startWorker } from "@/lib/jobs/worker";
-import { bookEngagement } from "@/lib/services/book-engagement";
 import { moveEngagement } from "@/lib/services/move-engagement";
-import { raiseNotices } from "@/lib/services/raise-notices";
 import { scrubEngagement } from "@/lib/services/scrub-engagement";
 import { MAX_ATTEMPTS, sendNotice } from "@/lib/services/send-notice";
 import { ownDatabase } from "../support";
 import { NOW } from "../world";
 import { bookIn, rowsOf } from "./asks";
+import { calendarProperty, MailServer } from "./mail-server";
 import { dwellIn, makeScene, type Scene } from "./scene";
 
-/** How the server answers the recipient of the next mail. */
-let answer: "take" | "refuse for now" | "refuse for good" | "drop after the text" = "take";
-let inbox: { mail: ParsedMail; raw: string }[] = [];
-
-const server = new SMTPServer({
-  authOptional: true,
-  disabledCommands: ["STARTTLS"],
-  onRcptTo(_address, _session, callback) {
-    if (answer === "take" || answer === "drop after the text") return callback();
-    const error: Error & { responseCode?: number } = new Error("mailbox says no");
-    error.responseCode = answer === "refuse for good" ? 550 : 451;
-    callback(error);
-  },
-  onData(stream, _session, callback) {
-    const chunks: Buffer[] = [];
-    stream.on("data", (chunk: Buffer) => chunks.push(chunk));
-    stream.on("end", async () => {
-      const raw = Buffer.concat(chunks).toString("utf8");
-      inbox.push({ raw, mail: await simpleParser(raw) });
-      if (answer !== "drop after the text") return callback();
-      // The text is with the server, its word never reaches us.
-      answer = "take";
-      for (const connection of server.connections as Set<{ _socket: { destroy(): void } }>)
-        connection._socket.destroy();
-    });
-  },
-});
-
+const server = new MailServer();
 ownDatabase();
 let scene: Scene;
 beforeAll(async () => {
-  await new Promise<void>((resolve) => server.listen(0, "127.0.0.1", resolve));
-  const address = server.server.address();
-  if (address === null || typeof address === "string") throw new Error("the mail server has no port");
-  process.env.SMTP_URL = `smtp://127.0.0.1:${address.port}`;
+  process.env.SMTP_URL = await server.listen();
   scene = await makeScene();
 });
-afterAll(() => new Promise<void>((resolve) => server.close(() => resolve())));
+afterAll(() => server.close());
 beforeEach(() => {
-  answer = "take";
-  inbox = [];
+  server.manners = "take";
+  server.inbox = [];
 });
 
 afterEach(async () => {
@@ -94,18 +60,6 @@ async function until(holds: () => Promise<boolean>): Promise<void> {
   }
 }
 
-const mailsTo = (email: string) =>
-  inbox.filter(({ mail }) => (mail.to as AddressObject).value.some(({ address }) => address === email));
-
-/** A property of the calendar part, after undoing the folding of RFC 5545. */
-function property(mail: ParsedMail, name: string): string | undefined {
-  const part = mail.attachments.find(({ contentType }) => contentType.startsWith("text/calendar"));
-  const lines = part?.content.toString("utf8").replaceAll("\r\n ", "").split("\r\n");
-  return lines
-    ?.find((line) => line.startsWith(`${name}:`) || line.startsWith(`${name};`))
-    ?.replace(/^[^:]*:/, "");
-}
-
 async function noticesOfEngagement(id: string) {
   return rowsOf(sql`
     select kind, delivery, attempts, last_error, message_id from notices where engagement_id = ${id}
@@ -120,36 +74,40 @@ describe("mail about an engagement", () => {
     expect(await runJobs()).toBe(0);
     await scrubEngagement(scene.planner, body.id, { reason: "dome stuck" }, NOW);
     expect(await runJobs()).toBe(0);
-    const mails = mailsTo(scene.clearing.email);
-    expect(mails.map(({ mail }) => property(mail, "METHOD"))).toEqual(["REQUEST", "REQUEST", "CANCEL"]);
-    expect(mails.map(({ mail }) => property(mail, "UID"))).toEqual(
+    const mails = server.mailsTo(scene.clearing.email);
+    expect(mails.map(({ mail }) => calendarProperty(mail, "METHOD"))).toEqual([
+      "REQUEST",
+      "REQUEST",
+      "CANCEL",
+    ]);
+    expect(mails.map(({ mail }) => calendarProperty(mail, "UID"))).toEqual(
       Array(3).fill(`${body.id}@dwellbook.invalid`),
     );
-    expect(mails.map(({ mail }) => property(mail, "SEQUENCE"))).toEqual(["0", "1", "2"]);
-    expect(mails.map(({ mail }) => property(mail, "STATUS"))).toEqual([
+    expect(mails.map(({ mail }) => calendarProperty(mail, "SEQUENCE"))).toEqual(["0", "1", "2"]);
+    expect(mails.map(({ mail }) => calendarProperty(mail, "STATUS"))).toEqual([
       "TENTATIVE",
       "TENTATIVE",
       "CANCELLED",
     ]);
     const stamp = (iso: string) => iso.replace(/[-:]|\.000/g, "");
-    expect(mails.map(({ mail }) => property(mail, "DTSTART"))).toEqual([
+    expect(mails.map(({ mail }) => calendarProperty(mail, "DTSTART"))).toEqual([
       stamp(body.from),
       stamp(dwellIn(scene.pass, 10).from),
       stamp(dwellIn(scene.pass, 10).from),
     ]);
-    expect(mailsTo(scene.airUnit.email)).toHaveLength(3);
-    expect(inbox).toHaveLength(6);
+    expect(server.mailsTo(scene.airUnit.email)).toHaveLength(3);
+    expect(server.inbox).toHaveLength(6);
   });
 
   it("is sent by the worker's own task from the queue, and tried again later when that failed", async () => {
     const body = await bookIn(scene);
-    answer = "refuse for now";
+    server.manners = "refuse for now";
     const worker = await startWorker([sendNoticeTask]);
     try {
       const refused = sql`select 1 from notices where engagement_id = ${body.id} and attempts > 0`;
       await until(async () => (await rowsOf(refused)).length === 2);
-      expect(inbox).toEqual([]);
-      answer = "take";
+      expect(server.inbox).toEqual([]);
+      server.manners = "take";
       // The library waits e seconds after the first failure, then tries by itself.
       await until(async () => (await rowsOf(WAITING)).length === 0);
     } finally {
@@ -158,13 +116,13 @@ describe("mail about an engagement", () => {
     const [sent] = await noticesOfEngagement(body.id);
     expect(sent?.delivery).toBe("sent");
     expect(Number(sent?.attempts)).toBeGreaterThan(1);
-    expect(inbox).toHaveLength(2);
+    expect(server.inbox).toHaveLength(2);
   });
 
   it("has the parts, headers and link that the notice was given", async () => {
     const body = await bookIn(scene);
     await runJobs();
-    const [received] = mailsTo(scene.clearing.email);
+    const [received] = server.mailsTo(scene.clearing.email);
     if (!received) throw new Error("no mail has come");
     const { mail, raw } = received;
     const [row] = await rowsOf(sql`
@@ -180,45 +138,47 @@ describe("mail about an engagement", () => {
     expect(raw).toMatch(/Content-Type: multipart\/alternative/);
     expect(raw).toMatch(/Content-Type: text\/calendar; charset=utf-8; method=REQUEST/i);
     expect(mail.text).toMatch(/http:\/\/127\.0\.0\.1:3000\/answer\/[\w-]+\.[\w-]+/);
-    expect(property(mail, "ATTENDEE")?.toLowerCase()).toBe(`mailto:${scene.clearing.email}`);
-    expect(property(mail, "ORGANIZER")?.toLowerCase()).toBe("mailto:book@dwellbook.invalid");
+    expect(calendarProperty(mail, "ATTENDEE")?.toLowerCase()).toBe(`mailto:${scene.clearing.email}`);
+    expect(calendarProperty(mail, "ORGANIZER")?.toLowerCase()).toBe("mailto:book@dwellbook.invalid");
   });
 
   it("is tried again while the server refuses for now, and then goes out with the same Message-ID", async () => {
     const body = await bookIn(scene);
-    answer = "refuse for now";
+    server.manners = "refuse for now";
     expect(await runJobs()).toBe(2);
     const [waiting] = await noticesOfEngagement(body.id);
     expect(waiting).toMatchObject({ delivery: "queued", attempts: 1 });
     expect(String(waiting?.last_error)).toContain("mailbox says no");
-    answer = "take";
+    server.manners = "take";
     expect(await runJobs()).toBe(0);
     expect(await noticesOfEngagement(body.id)).toMatchObject([
       { delivery: "sent", attempts: 2, last_error: null },
     ]);
-    expect(mailsTo(scene.clearing.email).map(({ mail }) => mail.messageId)).toEqual([waiting?.message_id]);
+    expect(server.mailsTo(scene.clearing.email).map(({ mail }) => mail.messageId)).toEqual([
+      waiting?.message_id,
+    ]);
   });
 
   it("keeps its order: a cancellation waits for the request before it", async () => {
     const body = await bookIn(scene);
-    answer = "refuse for now";
+    server.manners = "refuse for now";
     await runJobs();
     await scrubEngagement(scene.planner, body.id, { reason: "cloud" }, NOW);
-    answer = "take";
+    server.manners = "take";
     const [cancellation] = await rowsOf(sql`
       select id from notices where engagement_id = ${body.id} and authority_id = ${scene.clearing.id} and kind = 'cancellation'`);
     await sendNotice(String(cancellation?.id));
-    expect(mailsTo(scene.clearing.email).map(({ mail }) => property(mail, "METHOD"))).toEqual([
+    expect(server.mailsTo(scene.clearing.email).map(({ mail }) => calendarProperty(mail, "METHOD"))).toEqual([
       "REQUEST",
       "CANCEL",
     ]);
     await runJobs();
-    expect(mailsTo(scene.clearing.email)).toHaveLength(2);
+    expect(server.mailsTo(scene.clearing.email)).toHaveLength(2);
   });
 
   it("counts as failed, with the reason and a ledger row, once the server refuses for good", async () => {
     const body = await bookIn(scene);
-    answer = "refuse for good";
+    server.manners = "refuse for good";
     expect(await runJobs()).toBe(0);
     expect(await noticesOfEngagement(body.id)).toMatchObject([{ delivery: "failed", attempts: 1 }]);
     const [row] = await rowsOf(sql`
@@ -229,7 +189,7 @@ describe("mail about an engagement", () => {
 
   it("counts as failed after the last attempt, and is given up then", async () => {
     const body = await bookIn(scene);
-    answer = "refuse for now";
+    server.manners = "refuse for now";
     for (let attempt = 1; attempt < MAX_ATTEMPTS; attempt++) expect(await runJobs()).toBe(2);
     expect(await runJobs()).toBe(0);
     expect(await noticesOfEngagement(body.id)).toMatchObject([
@@ -241,56 +201,20 @@ describe("mail about an engagement", () => {
     const body = await bookIn(scene);
     const ids = await rowsOf(sql`select id from notices where engagement_id = ${body.id}`);
     await Promise.all([...ids, ...ids, ...ids].map(({ id }) => sendNotice(String(id))));
-    expect(inbox).toHaveLength(2);
+    expect(server.inbox).toHaveLength(2);
     await runJobs();
-    expect(inbox).toHaveLength(2);
+    expect(server.inbox).toHaveLength(2);
   });
 
   it("repeats only under the same Message-ID when the server's word is lost after the text", async () => {
     const body = await bookIn(scene);
-    answer = "drop after the text";
+    server.manners = "drop after the text";
     await runJobs();
     await runJobs();
-    const mails = mailsTo(scene.airUnit.email);
-    const all = [...mails, ...mailsTo(scene.clearing.email)];
+    const mails = server.mailsTo(scene.airUnit.email);
+    const all = [...mails, ...server.mailsTo(scene.clearing.email)];
     expect(all).toHaveLength(3);
     expect(new Set(all.map(({ mail }) => mail.messageId)).size).toBe(2);
     expect(await noticesOfEngagement(body.id)).toMatchObject([{ delivery: "sent" }]);
-  });
-});
-
-describe("notices and jobs", () => {
-  const counts = async () =>
-    (
-      await rowsOf(sql`
-      select (select count(*)::int from notices) as notices,
-        (select count(*)::int from graphile_worker._private_jobs) as jobs`)
-    )[0];
-
-  it("are never there when the transaction that raised them is not", async () => {
-    const body = await bookIn(scene);
-    const before = await counts();
-    const work = inTransaction(async (tx) => {
-      await tx.execute(sql`update engagements set calendar_sequence = 7 where id = ${body.id}`);
-      const members = [{ authority: scene.clearing, kind: "revised request", because: "of a test" }] as const;
-      await raiseNotices(tx, { engagementId: body.id, members, nowMs: NOW });
-      const [inside] = (await tx.execute(sql`select count(*)::int as n from graphile_worker._private_jobs`))
-        .rows;
-      expect(inside?.n).toBe(Number(before?.jobs) + 1);
-      throw new Error("undo");
-    });
-    await expect(work).rejects.toThrow("undo");
-    expect(await counts()).toEqual(before);
-  });
-
-  it("are not there for a booking that was refused", async () => {
-    const before = await counts();
-    const booked = bookEngagement(
-      scene.planner,
-      { passId: scene.pass.id, ...dwellIn(scene.pass, 0, 1) },
-      NOW,
-    );
-    await expect(booked).rejects.toThrow("rules do not allow");
-    expect(await counts()).toEqual(before);
   });
 });

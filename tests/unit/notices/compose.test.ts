@@ -64,11 +64,13 @@ describe("later notices", () => {
     const { subject, textBody, calendarMethod, calendarBody } = compose({
       kind: "revised request",
       sequence: 1,
+      change: "the times of the dwell",
       formerFromMs,
       formerToMs: formerFromMs + 60_000,
     });
     expect(subject).toMatch(/^E-1042 revised: /);
     expect(textBody).toContain("2031-04-05 23:59:30Z to 2031-04-06 00:00:30Z (60 s), no longer planned");
+    expect(textBody).toContain("What has changed: the times of the dwell.");
     expect(textBody).toContain("Any answer to it is void");
     expect(calendarMethod).toBe("REQUEST");
     expect(entryLines(calendarBody)).toContain("SEQUENCE:1");

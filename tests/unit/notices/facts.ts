@@ -22,6 +22,7 @@ export const REQUEST: NoticeFacts = {
     maxElevationDeg: 61.8,
   },
   planner: { name: "Plan Ner", email: "plan.ner@example.invalid" },
+  change: null,
   reason: null,
   fired: null,
   answerByMs: Date.UTC(2031, 3, 6, 2, 52, 45),
