@@ -11,6 +11,7 @@ interface ErrorNoteProps {
 export function ErrorNote({ error, title }: ErrorNoteProps) {
   if (error === null || error === undefined) return null;
   const { message, details } = wordsOf(error);
+  const signedOut = error instanceof FetchError && error.status === 401;
   return (
     <div role="alert" className="max-w-[75ch] border-l-4 border-dwell bg-sheet px-3 py-2">
       <p className="font-semibold">{title ?? message}</p>
@@ -21,6 +22,12 @@ export function ErrorNote({ error, title }: ErrorNoteProps) {
             <li key={`${d.path} ${d.message}`}>{d.message}</li>
           ))}
         </ul>
+      ) : null}
+      {signedOut ? (
+        // In a tab of its own: what was typed here stays.
+        <a href="/sign-in" target="_blank" rel="noreferrer" className="act">
+          Sign in again in a new tab, then repeat this
+        </a>
       ) : null}
     </div>
   );
