@@ -15,7 +15,7 @@ export interface Stretch {
 /** Points per axis of the coarse grid of begin and end. */
 const GRID = 120;
 
-/** Candidates that are followed up; the gain over begin and end has two hills at most places, never many. */
+/** Candidates that are followed up: the gain over begin and end has few hills, mostly one before and one after culmination. */
 const SEEDS = 4;
 
 /**

@@ -1,7 +1,11 @@
 import type { MaterialData } from "./materials";
+import type { Sourced } from "./sourced";
 
-/** Temperature of a fragment before the first pulse, K (assumption: a sunlit fragment in low orbit). */
-const START_TEMPERATURE_K = 300;
+/** Temperature of a fragment before the first pulse, K. */
+export const START_TEMPERATURE: Sourced = {
+  value: 300,
+  source: "assumption of this project: a fragment in low orbit, now in the sun, now in the shadow",
+};
 
 /**
  * Heat in joules that takes a fragment from its temperature before the first pulse to its melting point.
@@ -9,7 +13,9 @@ const START_TEMPERATURE_K = 300;
  * than too late.
  */
 export function heatToMeltJ(material: MaterialData, massKg: number): number {
-  return massKg * material.heatCapacityJPerKgK.value * (material.meltingPointK.value - START_TEMPERATURE_K);
+  return (
+    massKg * material.heatCapacityJPerKgK.value * (material.meltingPointK.value - START_TEMPERATURE.value)
+  );
 }
 
 /** Heat in joules that one pulse leaves in a fragment which takes `interceptedJ` of it. */
