@@ -68,7 +68,7 @@ export function exactExtremum(
   const slope = (to[quantity] - from[quantity]) / (to.atMs - from.atMs);
   const stepMs = -near[quantity] / slope;
   const atMs = Math.min(to.atMs, Math.max(from.atMs, nearMs + stepMs));
-  return Math.abs(atMs - nearMs) < 0.05 ? near : exactCone(cone, atMs);
+  return Math.abs(atMs - nearMs) < 0.002 ? near : exactCone(cone, atMs);
 }
 
 /** The moment between two samples at which the object goes in or out of the cone, on SGP4, Unix ms. */
