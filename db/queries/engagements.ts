@@ -4,6 +4,7 @@ import type { Queryable, Transaction } from "../client";
 import { engagements } from "../schema/engagements";
 import { notices } from "../schema/notices";
 import { fragments } from "../schema/objects";
+import { passes } from "../schema/passes";
 import { people } from "../schema/people";
 import { laserSettings, stations } from "../schema/stations";
 
@@ -17,6 +18,16 @@ export type NewEngagementRow = typeof engagements.$inferInsert;
  */
 export async function lockStation(tx: Transaction, stationId: string) {
   const [row] = await tx.select().from(stations).where(eq(stations.id, stationId)).for("no key update");
+  return row ?? null;
+}
+
+/** Keeps a pass from being deleted while it is booked; null when it is not there (any more). */
+export async function holdPass(tx: Transaction, passId: string): Promise<{ stationId: string } | null> {
+  const [row] = await tx
+    .select({ stationId: passes.stationId })
+    .from(passes)
+    .where(eq(passes.id, passId))
+    .for("key share");
   return row ?? null;
 }
 

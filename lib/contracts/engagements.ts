@@ -171,6 +171,11 @@ export interface NoticeBody {
   } | null;
 }
 
+/** One notice with its words as they were sent: GET /api/notices/:id. */
+export interface NoticeSheetBody extends NoticeBody {
+  readonly text: string;
+}
+
 export interface LedgerBody {
   readonly id: number;
   readonly at: string;

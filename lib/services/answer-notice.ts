@@ -81,13 +81,13 @@ export async function takeAnswer(
       : null,
     newValues: { ...answer, noticeId: notice.id },
   });
-  await followUp(tx, locked, actor, answer, nowMs);
+  await followUp(tx, locked, { actor, confirmed: facts.confirmedBy.length > 0 }, answer, nowMs);
 }
 
 async function followUp(
   tx: Transaction,
   locked: Locked,
-  actor: Actor,
+  { actor, confirmed }: { actor: Actor; confirmed: boolean },
   answer: AnswerInput,
   nowMs: number,
 ): Promise<void> {
@@ -97,7 +97,7 @@ async function followUp(
   }
   // Whoever confirmed did not know these conditions: they confirm again, knowing them.
   const reopened =
-    answer.outcome === "no objection with conditions"
+    confirmed && answer.outcome === "no objection with conditions"
       ? await sendBack(tx, locked, SYSTEM, `conditions: ${answer.conditions ?? ""}`, nowMs)
       : locked;
   await tryClear(tx, reopened, nowMs);

@@ -1,5 +1,5 @@
 import type { Transaction } from "@/db/client";
-import { type EngagementRow, insertEngagement, lockStation } from "@/db/queries/engagements";
+import { type EngagementRow, holdPass, insertEngagement, lockStation } from "@/db/queries/engagements";
 import { authoritiesById } from "@/db/queries/notices";
 import { passRowsById } from "@/db/queries/passes";
 import { inTransaction } from "@/db/transaction";
@@ -44,8 +44,9 @@ interface Booking {
 
 async function book(tx: Transaction, booking: Booking): Promise<EngagementBody> {
   const { passId, dwell, nowMs } = booking;
+  const held = await holdPass(tx, passId);
+  const station = held ? await lockStation(tx, held.stationId) : null;
   const [pass] = await passRowsById(tx, [passId]);
-  const station = pass ? await lockStation(tx, pass.stationId) : null;
   if (!pass || !station) throw notFound("pass");
   await refuseWhenHeld(tx, station, { fragmentId: pass.fragmentId, dwell, exceptId: null });
   const judgement = await judgeDwell(tx, { passId, ...dwell, nowMs, engagementId: null });

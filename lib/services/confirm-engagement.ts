@@ -9,10 +9,11 @@ import type { DecisionFacts } from "@/lib/engagement/facts";
 import { notAllowed, type Reason } from "@/lib/engagement/refusal";
 import { type Actor, may } from "@/lib/engagement/roles";
 import { judgeOwn } from "./clear-engagement";
+import { refuseStranger } from "./command-right";
 import { judgedFacts } from "./decision-facts";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
 import { writeLedger } from "./ledger";
-import { forbid, permit } from "./permit";
+import { permit } from "./permit";
 import { readBody } from "./read-input";
 import { currentBody } from "./view-engagement";
 
@@ -30,9 +31,7 @@ export async function confirmEngagement(
   nowMs: number,
 ): Promise<EngagementBody> {
   if (!may(actor, "confirm") && !may(actor, "second confirmation")) throw notAllowed("confirm an engagement");
-  if (!may(actor, "confirm") && !actor.isSafetyOfficer) {
-    throw forbid("An administrator confirms only as safety officer.");
-  }
+  await refuseStranger(actor, "confirm", id, nowMs);
   const confirmation = await readBody(confirmInput, input);
   return inTransaction(async (tx) => {
     await confirm(tx, actor, id, confirmation, nowMs);

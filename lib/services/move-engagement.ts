@@ -11,6 +11,7 @@ import { conflict, notAllowed, type Refusal } from "@/lib/engagement/refusal";
 import { type Actor, may } from "@/lib/engagement/roles";
 import type { Interval } from "@/lib/planning/interval";
 import { acceptedEffect, reasonsAgainst } from "./accept-dwell";
+import { refuseStranger } from "./command-right";
 import { coordinationFacts } from "./decision-facts";
 import { dwellOf } from "./dwell-input";
 import { factsOfRow, type Locked, lockEngagement } from "./engagement-lock";
@@ -34,12 +35,12 @@ export async function moveEngagement(
   nowMs: number,
 ): Promise<EngagementBody> {
   if (!may(actor, "move own")) throw notAllowed("move an engagement");
+  await refuseStranger(actor, "move", id, nowMs);
   const wanted = await readBody(moveInput, input);
   try {
     return await inTransaction(async (tx) => {
       const locked = await lockEngagement(tx, id);
       const facts = await coordinationFacts(tx, actor, id);
-      refuseStranger(locked, facts, nowMs);
       if (locked.engagement.version !== wanted.version) throw staleVersion(locked.engagement);
       const dwell = dwellOf(wanted);
       if (!sameTimes(locked.engagement, dwell)) await move(tx, { locked, actor, facts, dwell, nowMs });
@@ -48,12 +49,6 @@ export async function moveEngagement(
   } catch (error) {
     throw overlapRefusal(error) ?? error;
   }
-}
-
-/** A planner of another engagement is refused before anything is said about it. */
-function refuseStranger(locked: Locked, facts: DecisionFacts, nowMs: number): void {
-  const decision = decide(factsOfRow(locked.engagement), "move", facts, nowMs);
-  if (!decision.ok && decision.refusals.some(({ kind }) => kind === "right")) permit(decision, "The move");
 }
 
 interface Move {

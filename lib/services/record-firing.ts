@@ -7,6 +7,7 @@ import { decide } from "@/lib/engagement/decide";
 import { checkFiring, type FiringClaim } from "@/lib/engagement/firing";
 import { notAllowed, notFound } from "@/lib/engagement/refusal";
 import { type Actor, may } from "@/lib/engagement/roles";
+import { refuseStranger } from "./command-right";
 import { coordinationFacts } from "./decision-facts";
 import { endEngagement } from "./end-engagement";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
@@ -30,6 +31,7 @@ export async function recordFiring(
 ): Promise<EngagementBody> {
   if (!may(actor, "record firing") || actor.id === null) throw notAllowed("record a firing");
   const recordedBy = actor.id;
+  await refuseStranger(actor, "fire", id, nowMs);
   const record = await readBody(fireInput, input);
   return inTransaction(async (tx) => {
     await fire(tx, { actor, recordedBy, id, record, nowMs });

@@ -3,6 +3,7 @@ import { type EngagementBody, scrubInput } from "@/lib/contracts/engagements";
 import { decide } from "@/lib/engagement/decide";
 import { notAllowed } from "@/lib/engagement/refusal";
 import { type Actor, may } from "@/lib/engagement/roles";
+import { refuseStranger } from "./command-right";
 import { coordinationFacts } from "./decision-facts";
 import { endEngagement } from "./end-engagement";
 import { factsOfRow, lockEngagement } from "./engagement-lock";
@@ -21,6 +22,7 @@ export async function scrubEngagement(
   nowMs: number,
 ): Promise<EngagementBody> {
   if (!may(actor, "scrub any") && !may(actor, "scrub own")) throw notAllowed("scrub an engagement");
+  await refuseStranger(actor, "scrub", id, nowMs);
   const { reason } = await readBody(scrubInput, input);
   return inTransaction(async (tx) => {
     const { engagement } = await lockEngagement(tx, id);

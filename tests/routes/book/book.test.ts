@@ -1,4 +1,4 @@
-import { beforeAll, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import * as opened from "@/app/api/answers/[token]/opened/route";
 import * as answers from "@/app/api/answers/[token]/route";
 import * as calendarFile from "@/app/api/calendar/[file]/route";
@@ -10,12 +10,16 @@ import * as scrub from "@/app/api/engagements/[id]/scrub/route";
 import * as engagements from "@/app/api/engagements/route";
 import * as ledger from "@/app/api/ledger/route";
 import * as answer from "@/app/api/notices/[id]/answer/route";
+import * as notice from "@/app/api/notices/[id]/route";
 import * as notices from "@/app/api/notices/route";
+import { database } from "@/db/client";
 import type { NoticeBody } from "@/lib/contracts/engagements";
 import { answerUrl } from "@/lib/services/raise-notices";
-import { checklistAt } from "../../database/book/asks";
+import { scrubEngagement } from "@/lib/services/scrub-engagement";
+import { bookIn, checklistAt } from "../../database/book/asks";
 import { dwellIn, makeScene, type Scene } from "../../database/book/scene";
 import { ownDatabase } from "../../database/support";
+import { addAuthority, addPerson, NOW } from "../../database/world";
 import { call, tokenFor } from "./caller";
 
 ownDatabase();
@@ -38,6 +42,15 @@ beforeAll(async () => {
 const UNKNOWN = "3f2b8c1e-9a47-4d56-8e0f-0123456789ab";
 
 describe("the order of refusal", () => {
+  /** An engagement of the planner's, for the writes that need one. */
+  let booked = "";
+  beforeAll(async () => {
+    booked = (await bookIn(scene, scene.laterPass)).id;
+  });
+  afterAll(async () => {
+    await scrubEngagement(scene.planner, booked, { reason: "test over" }, NOW);
+  });
+
   const writes = [
     ["POST /api/engagements", engagements.POST, "planner"],
     ["PATCH /api/engagements/:id", engagement.PATCH, "planner"],
@@ -47,7 +60,7 @@ describe("the order of refusal", () => {
   ] as const;
   for (const [name, handler, role] of writes) {
     it(`${name}: 401 before 403 before 400`, async () => {
-      const ask = { params: { id: UNKNOWN }, body: "this is not JSON" };
+      const ask = { params: { id: booked }, body: "this is not JSON" };
       const stranger = await call(handler, { ...ask, token: null });
       expect(stranger.status).toBe(401);
       expect((await call(handler, { ...ask, token: "dwb_wrong" })).status).toBe(401);
@@ -55,6 +68,8 @@ describe("the order of refusal", () => {
       const unread = await call(handler, { ...ask, token: token[role] ?? "" });
       expect(unread.status).toBe(400);
       expect(unread.json()).toMatchObject({ error: { code: "invalid", details: [] } });
+      const nowhere = { ...ask, params: { id: UNKNOWN }, token: token[role] ?? "" };
+      if (handler !== engagements.POST) expect((await call(handler, nowhere)).status).toBe(404);
     });
   }
 
@@ -121,9 +136,17 @@ describe("the story over HTTP", () => {
       params: { id: mine?.id ?? "" },
     });
     expect(desk.status).toBe(200);
+    const read = (name: string) =>
+      call(notice.GET, { token: token[name] ?? "", params: { id: mine?.id ?? "" } });
+    expect((await read("coordinator")).json()).toMatchObject({
+      id: mine?.id,
+      answer: { outcome: "no objection" },
+    });
+    expect(String((await read("planner")).json().text)).toContain("slant range");
+    expect((await read("air")).status).toBe(404);
     const all = await call(notices.GET, { ...ask("planner"), query: `?engagement=${id}` });
     const air = (all.json().notices as NoticeBody[]).find(
-      (notice) => notice.authorityName === "Brume Air Unit",
+      (other) => other.authorityName === "Brume Air Unit",
     );
     const link = answerUrl(air?.id ?? "", Date.parse(air?.dwellTo ?? "")).split("/answer/")[1] ?? "";
     const page = await call(answers.GET, { params: { token: link } });
@@ -196,7 +219,13 @@ describe("the subscription calendar", () => {
   });
 
   it("shows coordinators only what concerns their authority", async () => {
-    const url = String((await renew("air")).json().url);
-    expect((await feed(url)).text.match(/BEGIN:VEVENT/g)).toHaveLength(1);
+    const elsewhere = await addAuthority(database(), "Far Desk", null);
+    const outsider = await addPerson(database(), "Out Sider", "coordinator", { authorityId: elsewhere.id });
+    token.outsider = await tokenFor(outsider.id);
+    const entries = async (name: string) =>
+      (await feed(String((await renew(name)).json().url))).text.match(/BEGIN:VEVENT/g)?.length ?? 0;
+    expect(await entries("air")).toBe(await entries("planner"));
+    expect(await entries("air")).toBeGreaterThan(0);
+    expect(await entries("outsider")).toBe(0);
   });
 });
