@@ -47,5 +47,5 @@ export function ButtonLink({
   className = "",
   ...rest
 }: ComponentProps<typeof Link> & { look?: Look }) {
-  return <Link {...rest} className={`${SHAPE} ${LOOKS[look]} ${className}`} />;
+  return <Link prefetch={false} {...rest} className={`${SHAPE} ${LOOKS[look]} ${className}`} />;
 }

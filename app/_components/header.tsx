@@ -19,7 +19,7 @@ export function Header({ person, theme, nowMs }: HeaderProps) {
   return (
     <header className="border-b border-line">
       <div className="flex flex-wrap items-center gap-x-7 gap-y-1 px-4 pt-3 sm:px-7">
-        <Link href="/" className="text-[1.3125rem] font-[760] tracking-tight">
+        <Link prefetch={false} href="/" className="text-[1.3125rem] font-[760] tracking-tight">
           Dwellbook
         </Link>
         <div className="ml-auto">
@@ -30,7 +30,7 @@ export function Header({ person, theme, nowMs }: HeaderProps) {
         <ThemeSwitch initial={theme} />
         {person ? (
           <div className="flex items-baseline gap-3">
-            <Link href="/account" className="link">
+            <Link prefetch={false} href="/account" className="link">
               {person.name}
             </Link>
             <span className="text-[0.8125rem] text-quiet">{person.role}</span>

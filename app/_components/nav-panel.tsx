@@ -40,6 +40,7 @@ export function NavPanel({ items, children }: NavPanelProps) {
               {items.map((item) => (
                 <li key={item.href}>
                   <Link
+                    prefetch={false}
                     href={item.href}
                     aria-current={isHere(path, item.href) ? "page" : undefined}
                     className="block border-b-2 border-transparent py-2 text-quiet hover:text-ink aria-[current=page]:border-dwell aria-[current=page]:font-semibold aria-[current=page]:text-ink"

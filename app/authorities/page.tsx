@@ -94,7 +94,7 @@ function Concern({ authority }: { readonly authority: AuthorityBody }) {
       {authority.stations.map((station, index) => (
         <span key={station.id}>
           {index > 0 ? ", " : null}
-          <Link className="link" href={`/stations/${station.id}`}>
+          <Link prefetch={false} className="link" href={`/stations/${station.id}`}>
             {station.name}
           </Link>
         </span>

@@ -59,7 +59,7 @@ export function LedgerFilters({ search }: { readonly search: LedgerSearch }) {
         {search.subjectId === "" ? null : <input type="hidden" name="subjectId" value={search.subjectId} />}
         <div className="flex items-center gap-4">
           <Button type="submit">Search</Button>
-          <Link href="/ledger" className="act">
+          <Link prefetch={false} href="/ledger" className="act">
             Clear
           </Link>
         </div>

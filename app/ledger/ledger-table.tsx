@@ -50,7 +50,7 @@ function Subject({ entry }: { readonly entry: LedgerBody }) {
   const page = PAGES[entry.subjectKind];
   if (!page || !entry.subjectId) return <b>{entry.subjectLabel}</b>;
   return (
-    <Link href={`${page}/${entry.subjectId}`} className="link font-bold">
+    <Link prefetch={false} href={`${page}/${entry.subjectId}`} className="link font-bold">
       {entry.subjectLabel}
     </Link>
   );

@@ -79,7 +79,7 @@ function actionsColumn(viewerId: string, ask: (asked: Asked) => void): Column<Pe
           Change<span className="sr-only"> {person.name}</span>
         </button>
         {person.id === viewerId ? (
-          <Link className="act" href="/account">
+          <Link prefetch={false} className="act" href="/account">
             Your account
           </Link>
         ) : (
@@ -87,7 +87,7 @@ function actionsColumn(viewerId: string, ask: (asked: Asked) => void): Column<Pe
             End sessions<span className="sr-only"> of {person.name}</span>
           </button>
         )}
-        <Link className="act" href={`/ledger?subjectKind=person&subjectId=${person.id}`}>
+        <Link prefetch={false} className="act" href={`/ledger?subjectKind=person&subjectId=${person.id}`}>
           Ledger<span className="sr-only"> of {person.name}</span>
         </Link>
       </div>

@@ -39,7 +39,7 @@ function StationCard({ station, nowMs }: { readonly station: StationBody; readon
   return (
     <article className="sheet h-full p-4 sm:p-5">
       <h2 className="text-lg font-bold">
-        <Link href={`/stations/${station.id}`} className="link text-ink">
+        <Link prefetch={false} href={`/stations/${station.id}`} className="link text-ink">
           {station.name}
         </Link>{" "}
         <span className="figures text-[0.8125rem] font-normal text-quiet">

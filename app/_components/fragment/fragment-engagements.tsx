@@ -17,7 +17,7 @@ export function FragmentEngagements({ engagements }: Pick<FragmentSheetBody, "en
             key={e.id}
             className="flex min-h-11 flex-wrap items-center gap-x-5 gap-y-1 border-b border-line py-1.5 last:border-0"
           >
-            <Link href={`/engagements/${e.id}`} className="link font-bold text-ink">
+            <Link prefetch={false} href={`/engagements/${e.id}`} className="link font-bold text-ink">
               E-{e.number}
             </Link>
             {state ? <StateMark state={state} /> : null}

@@ -13,7 +13,7 @@ const COLUMNS: readonly Column<FragmentBody>[] = [
     head: "Fragment",
     lead: true,
     cell: (f) => (
-      <Link href={`/fragments/${f.id}`} className="link font-bold text-ink">
+      <Link prefetch={false} href={`/fragments/${f.id}`} className="link font-bold text-ink">
         {f.name}
       </Link>
     ),

@@ -166,7 +166,7 @@ function Afterwards({ report }: { readonly report: ImportReportBody }) {
         <p>Nothing newer came in, so nothing is swept.</p>
       )}
       <p className="mt-3">
-        <Link className="link" href="/passes">
+        <Link prefetch={false} className="link" href="/passes">
           Look at the passes
         </Link>
       </p>

@@ -14,7 +14,7 @@ export const PASS_COLUMNS: readonly Column<PassBody>[] = [
     head: "Fragment",
     lead: true,
     cell: (p) => (
-      <Link href={`/passes/${p.id}`} className="link font-bold text-ink">
+      <Link prefetch={false} href={`/passes/${p.id}`} className="link font-bold text-ink">
         {p.fragmentName}
       </Link>
     ),
@@ -60,7 +60,7 @@ function PassState({ pass }: { readonly pass: PassBody }) {
   const state = STATES.find((s): s is EngagementState => s === pass.engagementState);
   if (pass.engagementId && state) {
     return (
-      <Link href={`/engagements/${pass.engagementId}`} className="inline-block">
+      <Link prefetch={false} href={`/engagements/${pass.engagementId}`} className="inline-block">
         <StateMark state={state} />
       </Link>
     );

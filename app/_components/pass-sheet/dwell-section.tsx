@@ -135,7 +135,7 @@ function Booked({ sheet }: { readonly sheet: PassSheetBody }) {
   return (
     <p className="mt-4 flex flex-wrap items-center gap-3">
       {state ? <StateMark state={state} /> : null}
-      <Link href={`/engagements/${sheet.engagementId}`} className="link">
+      <Link prefetch={false} href={`/engagements/${sheet.engagementId}`} className="link">
         Open the engagement that holds this pass
       </Link>
     </p>

@@ -13,11 +13,11 @@ export function PassHead({ sheet }: { readonly sheet: PassSheetBody }) {
       <PageHeader
         title={
           <>
-            <Link href={`/fragments/${sheet.fragmentId}`} className="link text-ink">
+            <Link prefetch={false} href={`/fragments/${sheet.fragmentId}`} className="link text-ink">
               {sheet.fragmentName}
             </Link>{" "}
             over{" "}
-            <Link href={`/stations/${station.id}`} className="link text-ink">
+            <Link prefetch={false} href={`/stations/${station.id}`} className="link text-ink">
               {station.name}
             </Link>
           </>

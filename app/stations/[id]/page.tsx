@@ -74,10 +74,10 @@ function StationFigures({ station, nowMs }: { readonly station: StationBody; rea
         <UtcTime at={nowMs} zone={station.timeZone} />
       </p>
       <p className="mt-1 flex gap-5">
-        <Link className="act" href={`/passes?station=${station.id}`}>
+        <Link prefetch={false} className="act" href={`/passes?station=${station.id}`}>
           Passes of this station
         </Link>
-        <Link className="act" href={`/calendar?station=${station.id}`}>
+        <Link prefetch={false} className="act" href={`/calendar?station=${station.id}`}>
           Calendar of this station
         </Link>
       </p>
@@ -97,7 +97,7 @@ function Concerned({ station }: { readonly station: StationBody }) {
         <ul>
           {station.authorities.map((authority) => (
             <li key={authority.id}>
-              <Link href={`/authorities#${authority.id}`} className="act">
+              <Link prefetch={false} href={`/authorities#${authority.id}`} className="act">
                 {authority.name}
               </Link>{" "}
               <span className="text-quiet">{authority.kind}</span>
