@@ -1,4 +1,4 @@
-import type { EarthFixedNode } from "../orbit/earth-fixed";
+import { type EarthFixedNode, earthFixedNode } from "../orbit/earth-fixed";
 import type { Orbit } from "../orbit/propagate";
 import { polishExtremum } from "./polish";
 import { rootBetween, type Stretch, sightBetween, sightEdge } from "./samples";
@@ -21,8 +21,8 @@ export interface NearPoint {
 }
 
 /**
- * The polynomial is trusted to say on which side of the limit an extremum lies when the sine of its
- * elevation is farther than this from the limit's: 33 m at 100 km would be 3.3e-4.
+ * The polynomial is trusted to say on which side of the limit an object stands when the sine of its elevation
+ * is farther than this from the limit's: 63 m at 200 km would be 3e-4.
  */
 const SURE = 1e-3;
 
@@ -48,7 +48,7 @@ export function cutStretch(
   for (let i = 1; i <= stretch.parts; i++) {
     const fromMs = edges[i - 1] as number;
     const toMs = edges[i] as number;
-    sightEdge(sight, stretch, i, next);
+    if (!sightSurely(orbit, sight, stretch, i, next)) return null;
     if (here.receding < 0 && next.receding >= 0) {
       nearPoints.push(nearPoint(sight, stretch, fromMs, here.receding, toMs, next.receding));
     }
@@ -67,6 +67,19 @@ export function cutStretch(
   }
   points.push(edgePoint(stretch.last, here));
   return points;
+}
+
+/**
+ * Sights the object at the edge of a part; near the limit on SGP4 itself, so that the sign there can be
+ * relied on when the crossing is polished. False where propagation fails.
+ */
+function sightSurely(orbit: Orbit, sight: Sight, stretch: Stretch, i: number, out: Sighting): boolean {
+  sightEdge(sight, stretch, i, out);
+  const inner = i > 0 && i < stretch.parts;
+  if (!inner || Math.abs(out.sinElevation - sight.sinMin) > SURE) return true;
+  const node = earthFixedNode(orbit, stretch.edgesMs[i] as number);
+  if (node) sightNode(sight, node, out);
+  return node !== null;
 }
 
 function edgePoint(node: EarthFixedNode, seen: Sighting): Breakpoint {

@@ -27,6 +27,12 @@ export type Screening =
 /** Longest stretch that one SGP4 state of the other object is carried over, ms. */
 const CHUNK_MS = 180_000;
 
+/**
+ * A sample on the polynomials is trusted to be inside or outside of the cone when it is farther from its edge
+ * than this: they are off by some metres, by 2 km at worst near the perigee of a long orbit.
+ */
+const SURE_RAD = 1e-3;
+
 /** Near times are looked at this often; within one step the angle has at most one extremum. */
 const SAMPLE_MS = 1000;
 
@@ -134,7 +140,8 @@ function trace(cone: Cone, fromMs: number, toMs: number): { points: ConeSample[]
   const nearest: ConeSample[] = [];
   for (let i = 1; i <= steps; i++) {
     const atMs = fromMs + ((toMs - fromMs) * i) / steps;
-    const next = i === steps ? exactCone(cone, atMs) : sampleCone(cone, atMs);
+    let next = sampleCone(cone, atMs);
+    if (i === steps || Math.abs(next.outsideRad) < SURE_RAD) next = exactCone(cone, atMs);
     if (last.opening > 0 !== next.opening > 0) points.push(exactExtremum(cone, "opening", last, next));
     if (last.cosineRate > 0 && next.cosineRate <= 0) {
       nearest.push(exactExtremum(cone, "cosineRate", last, next));
