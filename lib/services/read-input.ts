@@ -12,7 +12,7 @@ export function readInput<T extends z.ZodType>(schema: T, input: unknown): z.inf
   const faults = parsed.error.issues.map((issue) => ({ issue, value: valueAt(input, issue.path) }));
   const reasons: Reason[] = faults.map(({ issue, value }) => ({
     path: issue.path.join("."),
-    message: value === undefined || value === null ? `missing: ${issue.message}` : issue.message,
+    message: wordsOf(issue, value),
   }));
   if (faults.every(({ issue, value }) => isLacking(issue, value))) {
     throw refused("Something is missing, or out of its range.", reasons);
@@ -21,6 +21,15 @@ export function readInput<T extends z.ZodType>(schema: T, input: unknown): z.inf
 }
 
 type Issue = z.core.$ZodIssue;
+
+/** The schema's own words; the library's stock sentences name types and say nothing to a person. */
+function wordsOf(issue: Issue, value: unknown): string {
+  const isStock = issue.message.startsWith("Invalid input");
+  const isMissing = value === undefined || value === null;
+  if (isMissing) return isStock ? `${issue.path.join(".")} is missing` : `missing: ${issue.message}`;
+  if (isStock && issue.code === "invalid_type") return `expected ${issue.expected}`;
+  return issue.message;
+}
 
 /** True when the field can be read and is only missing, empty or out of range. */
 function isLacking(issue: Issue, value: unknown): boolean {
