@@ -1,0 +1,95 @@
+"use client";
+
+import Link from "next/link";
+import useSWR from "swr";
+import { fetchJson } from "@/app/_client/fetch-json";
+import { Caution } from "@/app/_components/caution";
+import { ErrorNote } from "@/app/_components/error-note";
+import { ClosureList } from "@/app/_components/pass-sheet/closure-list";
+import { EffectFigures } from "@/app/_components/pass-sheet/effect-figures";
+import { StripOfPass } from "@/app/_components/pass-strip/strip-of-pass";
+import { Section } from "@/app/_components/section";
+import { LedgerTable } from "@/app/ledger/ledger-table";
+import type { EngagementSheetBody } from "@/lib/contracts/engagements";
+import type { PassSheetBody } from "@/lib/contracts/passes";
+import { Commands } from "./commands";
+import { Conditions } from "./conditions";
+import { EngagementHead } from "./engagement-head";
+import { FiringRecord } from "./firing-record";
+import { NoticeList } from "./notice-list";
+import { Outstanding } from "./outstanding";
+import { WordsGiven } from "./words-given";
+
+interface EngagementViewProps {
+  readonly initial: EngagementSheetBody;
+}
+
+/** One engagement in full, read anew every half minute. */
+export function EngagementView({ initial }: EngagementViewProps) {
+  const {
+    data: sheet = initial,
+    error,
+    mutate,
+  } = useSWR<EngagementSheetBody>(`/api/engagements/${initial.id}`, fetchJson, {
+    fallbackData: initial,
+    refreshInterval: 30_000,
+    revalidateOnMount: false,
+  });
+  const { data: pass, error: passError } = useSWR<PassSheetBody>(`/api/passes/${sheet.passId}`, fetchJson, {
+    revalidateOnFocus: false,
+  });
+  return (
+    <div className="grid gap-5">
+      <EngagementHead sheet={sheet} zone={pass?.station.timeZone ?? null} />
+      {error ? (
+        <ErrorNote error={error} title="It could not be read anew; this is the last state known" />
+      ) : null}
+      <Conditions notices={sheet.notices} />
+      <Commands sheet={sheet} onChanged={() => void mutate()} />
+      <div className="grid gap-5 xl:grid-cols-2">
+        <Section title="What it waits for">
+          <Outstanding sheet={sheet} />
+        </Section>
+        <Section title="Names and words given">
+          <WordsGiven sheet={sheet} />
+        </Section>
+      </div>
+      {sheet.firing ? (
+        <Section title="Firing record">
+          <FiringRecord firing={sheet.firing} />
+        </Section>
+      ) : null}
+      <Section
+        title="The dwell"
+        intro="Predicted when it was booked, from the element set of then."
+        actions={
+          <Link className="act" href={`/passes/${sheet.passId}`}>
+            Open the pass
+          </Link>
+        }
+      >
+        <EffectFigures estimate={sheet.effect} />
+        <div className="mt-4">
+          {pass ? <StripOfPass pass={{ ...pass, booked: sheet }} size="large" /> : null}
+          {!pass && !passError ? <p role="status">Reading the pass …</p> : null}
+          <ErrorNote error={passError} title="The pass could not be read" />
+        </div>
+        {sheet.closures.length > 0 ? (
+          <div className="mt-4">
+            <h3 className="font-semibold">What touches these seconds</h3>
+            <ClosureList closures={sheet.closures} />
+          </div>
+        ) : null}
+        <Caution />
+      </Section>
+      <Section title="Notices and answers">
+        <NoticeList notices={sheet.notices} />
+      </Section>
+      {sheet.history.length > 0 ? (
+        <Section title="History" intro="From the ledger, newest first.">
+          <LedgerTable entries={sheet.history} />
+        </Section>
+      ) : null}
+    </div>
+  );
+}
