@@ -20,7 +20,10 @@ export interface Orbit {
   readonly elements: Elements;
   /** Anomalistic period from the mean motion of the set, in seconds. */
   readonly periodS: number;
-  /** TEME state at a Unix time in milliseconds (fractions count). Never throws, never gives NaN. */
+  /**
+   * TEME state at a Unix time in milliseconds (fractions count). Never throws, never gives NaN. It judges that
+   * one moment: an orbit that dips under the ground has states again beyond it.
+   */
   stateAt(atMs: number): Propagation;
 }
 
