@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { identifierText, instantText, type SpanBody } from "./common";
+import type { GroundBody } from "./pass-surroundings";
 
 export const passQuery = z.strictObject({
   station: identifierText.optional(),
@@ -140,6 +141,8 @@ export interface PassSheetBody extends PassBody {
     readonly addedDeg: number;
     readonly timingGuardS: number;
   }[];
+  /** Where it goes over the Earth; null where the element set gives no state around the pass. */
+  readonly ground: GroundBody | null;
 }
 
 export interface BandBody {

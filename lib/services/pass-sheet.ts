@@ -13,6 +13,7 @@ import { type FactBook, loadFactBook } from "./fact-book";
 import { intervalOf } from "./fact-rows";
 import { type ConcernedAuthority, concernedAuthorities } from "./judge-dwell";
 import { passBody } from "./pass-body";
+import { groundBody } from "./pass-ground";
 import { crossingBodies, elementSetBody, laserBody, stationBody } from "./pass-sheet-parts";
 import { AIM, orbitOrNull } from "./pass-work";
 import { type OfferedPass, planOffers } from "./plan-offers";
@@ -66,6 +67,7 @@ async function sheetOf(
     concerned: concernedBodies(concernedAuthorities(book, geometry, facts, dwell)),
     assumptions: figured.ok ? assumptionsOf(figured.figures.laser, figured.figures.body, row.bodySource) : [],
     crossings: crossingBodies(book, row),
+    ground: orbit && (await groundBody(q, orbit, row, dwell)),
   };
 }
 

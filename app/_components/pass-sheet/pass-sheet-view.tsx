@@ -1,5 +1,6 @@
 "use client";
 
+import type { ReactNode } from "react";
 import useSWR from "swr";
 import { fetchJson } from "@/app/_client/fetch-json";
 import { ErrorNote } from "@/app/_components/error-note";
@@ -16,10 +17,12 @@ interface PassSheetViewProps {
   readonly initial: PassSheetBody;
   /** Only planners propose; others read why not. */
   readonly mayPropose: boolean;
+  /** The ground track, drawn on the server: the coastline stays there. */
+  readonly ground: ReactNode;
 }
 
 /** One pass in full: strip, figures, dwell, closures, sky, samples and what it all rests on. */
-export function PassSheetView({ initial, mayPropose }: PassSheetViewProps) {
+export function PassSheetView({ initial, mayPropose, ground }: PassSheetViewProps) {
   const { data: sheet = initial, error } = useSWR<PassSheetBody>(`/api/passes/${initial.id}`, fetchJson, {
     fallbackData: initial,
     refreshInterval: 60_000,
@@ -41,6 +44,7 @@ export function PassSheetView({ initial, mayPropose }: PassSheetViewProps) {
           <SkyChart sheet={sheet} dwell={spanOf(sheet.booked ?? sheet.dwell)} />
         </Section>
       </div>
+      <Section title="Ground track">{ground}</Section>
       <Section
         title="Samples"
         intro={`Every few seconds from rise to set. Worth is the gain in the aim “${sheet.aim}”.`}

@@ -1,4 +1,5 @@
 import { notFound } from "next/navigation";
+import { GroundTrack } from "@/app/_components/ground-track/ground-track";
 import { PassSheetView } from "@/app/_components/pass-sheet/pass-sheet-view";
 import { requirePerson } from "@/app/_server/require-person";
 import { Refusal } from "@/lib/engagement/refusal";
@@ -15,5 +16,11 @@ export default async function PassPage({ params }: { readonly params: Promise<{ 
     if (error instanceof Refusal && error.status === 404) notFound();
     throw error;
   });
-  return <PassSheetView initial={sheet} mayPropose={may(person, "propose")} />;
+  return (
+    <PassSheetView
+      initial={sheet}
+      mayPropose={may(person, "propose")}
+      ground={<GroundTrack sheet={sheet} />}
+    />
+  );
 }
