@@ -30,10 +30,11 @@ export function Dialog({ open, onClose, title, children }: DialogProps) {
       ref={box}
       aria-labelledby={titleId}
       onClose={onClose}
-      className="sheet w-[min(36rem,calc(100vw-1.5rem))] max-h-[calc(100dvh-1.5rem)] overflow-y-auto border-ink p-5"
+      className="sheet w-[min(36rem,calc(100vw-1.5rem))] max-h-[calc(100dvh-1.5rem)] flex-col overflow-hidden border-ink open:flex"
     >
       {open ? (
-        <>
+        // The box inside scrolls, not the dialog: see the red pane in globals.css.
+        <div className="min-h-0 overflow-y-auto p-5">
           <div className="mb-4 flex items-baseline justify-between gap-4">
             <h2 id={titleId} className="text-xl font-bold">
               {title}
@@ -43,7 +44,7 @@ export function Dialog({ open, onClose, title, children }: DialogProps) {
             </button>
           </div>
           {children}
-        </>
+        </div>
       ) : null}
     </dialog>
   );

@@ -5,12 +5,15 @@ interface ErrorNoteProps {
   readonly error: unknown;
   /** What failed: "The dwell was not booked". */
   readonly title?: string;
+  /** Paths whose reasons stand beside their fields: they are not said twice. */
+  readonly shownElsewhere?: readonly string[];
 }
 
 /** A refusal or failure in words, with every reason; announced at once. */
-export function ErrorNote({ error, title }: ErrorNoteProps) {
+export function ErrorNote({ error, title, shownElsewhere = [] }: ErrorNoteProps) {
   if (error === null || error === undefined) return null;
-  const { message, details } = wordsOf(error);
+  const { message, details: all } = wordsOf(error);
+  const details = all.filter((d) => !shownElsewhere.includes(d.path));
   const signedOut = error instanceof FetchError && error.status === 401;
   return (
     <div role="alert" className="max-w-[75ch] border-l-4 border-dwell bg-sheet px-3 py-2">

@@ -6,11 +6,11 @@ import { type ReactNode, useEffect, useState } from "react";
 
 interface NavPanelProps {
   readonly items: readonly { readonly href: string; readonly label: string }[];
-  /** Theme switch and sign-out, at the end. */
+  /** Theme switch and sign-out, for narrow screens. */
   readonly children: ReactNode;
 }
 
-/** The navigation: in a row where there is room, behind a Menu button below 1024 px. */
+/** The navigation: in a row where there is room, behind a Menu button with the tools below 1024 px. */
 export function NavPanel({ items, children }: NavPanelProps) {
   const path = usePathname();
   const [open, setOpen] = useState(false);
@@ -18,7 +18,7 @@ export function NavPanel({ items, children }: NavPanelProps) {
   useEffect(() => setOpen(false), [path]);
 
   return (
-    <div className="px-4 pb-2 sm:px-7 lg:flex lg:items-end lg:justify-between lg:gap-8 lg:pb-0">
+    <div className="px-4 pb-2 sm:px-7 lg:pb-0">
       {items.length > 0 ? (
         <button
           type="button"
@@ -32,11 +32,11 @@ export function NavPanel({ items, children }: NavPanelProps) {
       ) : null}
       <div
         id="nav-panel"
-        className={`${open || items.length === 0 ? "flex" : "hidden"} flex-col gap-4 py-3 lg:flex lg:grow lg:flex-row lg:flex-wrap lg:items-end lg:justify-between lg:gap-x-8 lg:gap-y-1 lg:py-0`}
+        className={`${open || items.length === 0 ? "flex" : "hidden"} flex-col gap-4 py-3 lg:flex lg:py-0`}
       >
         {items.length > 0 ? (
           <nav aria-label="Pages">
-            <ul className="flex flex-col lg:flex-row lg:gap-5">
+            <ul className="grid grid-cols-2 gap-x-6 sm:grid-cols-3 lg:flex lg:flex-wrap lg:gap-x-5">
               {items.map((item) => (
                 <li key={item.href}>
                   <Link
@@ -52,7 +52,7 @@ export function NavPanel({ items, children }: NavPanelProps) {
             </ul>
           </nav>
         ) : null}
-        <div className="flex flex-wrap items-center gap-x-6 gap-y-3 lg:ml-auto lg:py-1.5">{children}</div>
+        <div className="flex flex-wrap items-center gap-x-6 gap-y-3 lg:hidden">{children}</div>
       </div>
     </div>
   );

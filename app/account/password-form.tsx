@@ -61,7 +61,7 @@ export function PasswordForm() {
             />
           )}
         </Field>
-        {error && details.length === 0 ? <ErrorNote error={error} /> : null}
+        <ErrorNote error={error} shownElsewhere={["current", "next"]} />
         <Button type="submit" busy={busy} className="justify-self-start">
           Change password
         </Button>

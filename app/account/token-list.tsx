@@ -61,7 +61,7 @@ export function TokenList({ initial }: { readonly initial: readonly TokenBody[] 
         </div>
         <Button type="submit">Make a token</Button>
       </form>
-      {error && !labelError ? <ErrorNote error={error} /> : null}
+      <ErrorNote error={error} shownElsewhere={["label"]} />
       {made ? (
         <ShownOnce
           title={`The token for “${made.label}”`}

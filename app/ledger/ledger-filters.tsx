@@ -16,11 +16,13 @@ export function LedgerFilters({ search }: { readonly search: LedgerSearch }) {
       <form
         key={JSON.stringify(search)}
         action="/ledger"
-        className="mb-5 grid items-end gap-4 sm:grid-cols-2 lg:grid-cols-[2fr_1.2fr_1.2fr_1.3fr_1.3fr_auto]"
+        className="mb-5 grid grid-cols-2 items-end gap-4 lg:grid-cols-[2fr_1.2fr_1.2fr_1.3fr_1.3fr_auto]"
       >
-        <Field label="Words in it" hint="who, what or why">
-          {(control) => <input {...control} name="text" type="search" defaultValue={search.text} />}
-        </Field>
+        <div className="col-span-2 lg:col-span-1">
+          <Field label="Words in it" hint="who, what or why">
+            {(control) => <input {...control} name="text" type="search" defaultValue={search.text} />}
+          </Field>
+        </div>
         <Field label="Who">
           {(control) => <input {...control} name="actor" type="search" defaultValue={search.actor} />}
         </Field>

@@ -81,7 +81,7 @@ function ChangeForm({ person, onDone }: { readonly person: PersonBody; readonly 
       <Field label="Reason" hint="Stands in the ledger." error={errorOf(details, "reason")}>
         {(control) => <input {...control} name="reason" maxLength={300} autoComplete="off" required />}
       </Field>
-      <ErrorNote error={error} title="Nothing was changed" />
+      <ErrorNote error={error} shownElsewhere={["role", "authorityId", "reason"]} />
       <Button type="submit" look="solid" busy={busy} className="justify-self-start">
         Change
       </Button>
@@ -129,7 +129,7 @@ function AuthorityField({
 function Tick({ name, label, on }: { readonly name: string; readonly label: string; readonly on: boolean }) {
   return (
     <label className="flex items-baseline gap-2.5">
-      <input type="checkbox" name={name} defaultChecked={on} className="size-4 translate-y-0.5" />
+      <input type="checkbox" name={name} defaultChecked={on} className="translate-y-0.5" />
       {label}
     </label>
   );

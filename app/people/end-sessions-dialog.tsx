@@ -55,7 +55,7 @@ function EndForm({ person, onDone }: { readonly person: PersonBody; readonly onD
       <Field label="Reason" hint="Stands in the ledger." error={errorOf(details, "reason")}>
         {(control) => <input {...control} name="reason" maxLength={300} autoComplete="off" required />}
       </Field>
-      {error && details.length === 0 ? <ErrorNote error={error} /> : null}
+      <ErrorNote error={error} shownElsewhere={["reason"]} />
       <Button type="submit" look="grave" busy={busy} className="justify-self-start">
         End all sessions
       </Button>
