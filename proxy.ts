@@ -28,7 +28,8 @@ function contentPolicy(nonce: string): string {
     // The calendar and charts place things by style attributes.
     "style-src-attr 'unsafe-inline'",
     "img-src 'self' data: blob:",
-    "font-src 'self'",
+    // The calendar brings its icons as a font inside its style sheet.
+    "font-src 'self' data:",
     "connect-src 'self'",
     "object-src 'none'",
     "base-uri 'none'",

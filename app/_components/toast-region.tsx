@@ -1,5 +1,6 @@
 "use client";
 
+import Link from "next/link";
 import { useEffect, useState } from "react";
 import { type Announcement, onAnnouncement } from "@/app/_client/announce";
 
@@ -39,7 +40,14 @@ function toast(a: Announcement, drop: (id: number) => void) {
       key={a.id}
       className={`flex items-start gap-4 rounded border bg-sheet px-4 py-2.5 ${a.kind === "problem" ? "border-l-4 border-dwell" : "border-ink"}`}
     >
-      <p>{a.message}</p>
+      <p>
+        {a.message}{" "}
+        {a.link ? (
+          <Link href={a.link.href} className="link whitespace-nowrap" onClick={() => drop(a.id)}>
+            {a.link.label}
+          </Link>
+        ) : null}
+      </p>
       <button type="button" className="act shrink-0 text-sm" onClick={() => drop(a.id)}>
         Close
       </button>

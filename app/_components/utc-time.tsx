@@ -16,11 +16,20 @@ export function UtcTime({ at, zone, show = "full" }: UtcTimeProps) {
   const ms = instantMs(at);
   const local = zone ? zoneTime(ms, zone) : null;
   return (
-    <span className="whitespace-nowrap">
-      <time dateTime={Number.isFinite(ms) ? new Date(ms).toISOString() : undefined} title={utcText(ms)}>
+    <span>
+      <time
+        className="whitespace-nowrap"
+        dateTime={Number.isFinite(ms) ? new Date(ms).toISOString() : undefined}
+        title={utcText(ms)}
+      >
         {FORMATS[show](ms)}
       </time>
-      {local ? <span className="ml-2 text-[0.8125rem] text-quiet">{`${local} ${zone}`}</span> : null}
+      {local ? (
+        <>
+          {" "}
+          <span className="inline-block text-[0.8125rem] font-normal text-quiet">{`${local} ${zone}`}</span>
+        </>
+      ) : null}
     </span>
   );
 }
