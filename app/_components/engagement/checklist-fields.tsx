@@ -10,10 +10,25 @@ interface ChecklistFieldsProps {
   readonly details: readonly { readonly path: string; readonly message: string }[];
 }
 
+/** What an empty field lacks, in the words of the checklist. */
+const MISSING: Record<keyof TypedChecklist, string> = {
+  airUnitCalledAt: "When was the air unit called?",
+  spotterInPlace: "The spotter must be in place.",
+  interlockTestedAt: "When was the interlock tested?",
+  clockOffsetMs: "What is the clock's offset, in ms?",
+  weather: "What is the weather?",
+  crewedListCheckedAt: "When was the crewed list checked?",
+};
+
 /** Every value of the checklist, in the order of the work before a dwell. */
 export function ChecklistFields({ typed, onChange, details }: ChecklistFieldsProps) {
   const set = (part: Partial<TypedChecklist>): void => onChange({ ...typed, ...part });
-  const errorAt = (name: keyof TypedChecklist) => errorOf(details, `checklist.${name}`);
+  const errorAt = (name: keyof TypedChecklist): string | null => {
+    const refused = errorOf(details, `checklist.${name}`);
+    if (refused === null) return null;
+    const value = typed[name];
+    return value === "" || value === false ? MISSING[name] : refused;
+  };
   return (
     <fieldset className="grid gap-4">
       <legend className="sr-only">Checklist</legend>

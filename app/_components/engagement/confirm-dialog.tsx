@@ -12,7 +12,7 @@ import { ChecklistFields } from "./checklist-fields";
 import { Conditions } from "./conditions";
 import type { CommandDialogProps } from "./scrub-dialog";
 import { toAttest } from "./sheet-facts";
-import { useCommand } from "./use-command";
+import { apartFrom, useCommand } from "./use-command";
 
 type ConfirmProps = CommandDialogProps & { readonly sheet: EngagementSheetBody };
 
@@ -68,7 +68,10 @@ function ConfirmForm({ sheet, onClose, onDone }: ConfirmProps) {
           )}
         </Field>
       ))}
-      <ErrorNote error={error} title="It was not confirmed" />
+      <ErrorNote
+        error={apartFrom(error, (path) => path.startsWith("checklist."))}
+        title="It was not confirmed"
+      />
       <div className="flex flex-wrap gap-3">
         <Button type="submit" look="solid" busy={busy}>
           Confirm with my name

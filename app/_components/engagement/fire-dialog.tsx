@@ -10,10 +10,13 @@ import { EMPTY_FIRING, firingBody, firingProblem, OUTCOME_WORDS, type TypedFirin
 import { InterruptionRows } from "./interruption-rows";
 import { utcWords } from "./read-utc";
 import type { CommandDialogProps } from "./scrub-dialog";
-import { useCommand } from "./use-command";
+import { apartFrom, useCommand } from "./use-command";
 import { UtcField } from "./utc-field";
 
 type FireProps = CommandDialogProps & { readonly engagement: EngagementBody };
+
+/** Reasons that stand beside their fields. */
+const FIELDS = /^(openedAt|closedAt|pulses|note|interruptions\.\d+\..+)$/;
 
 /** The record of what was fired, or that nothing was. */
 export function FireDialog({ engagement, ...dialog }: FireProps) {
@@ -60,7 +63,7 @@ function FireForm({ engagement, onClose, onDone }: FireProps) {
           />
         )}
       </Field>
-      <ErrorNote error={error} title="The record was not kept" />
+      <ErrorNote error={apartFrom(error, (path) => FIELDS.test(path))} title="The record was not kept" />
       <div className="flex flex-wrap gap-3">
         <Button type="submit" look="solid" busy={busy}>
           Keep this record

@@ -27,3 +27,15 @@ export function useCommand(onDone: (body: EngagementBody) => void) {
   const details: Details = error instanceof FetchError ? error.details : [];
   return { send, busy, error, details, refuse: setError };
 }
+
+/**
+ * The same refusal without the reasons that stand beside their fields already, so that nothing is said
+ * twice. `isField` tells from a reason's path whether a field shows it.
+ */
+export function apartFrom(error: unknown, isField: (path: string) => boolean): unknown {
+  if (!(error instanceof FetchError)) return error;
+  const rest = error.details.filter((d) => !isField(d.path));
+  if (rest.length === error.details.length) return error;
+  const message = rest.length === 0 ? "See the fields that are marked." : error.message;
+  return new FetchError(error.status, error.code, message, rest);
+}

@@ -54,7 +54,7 @@ export function NoticeCard({ notice, nowMs, mayAnswer, onAnswered }: NoticeCardP
         </div>
         {waits && notice.answerBy ? <Due at={notice.answerBy} nowMs={nowMs} /> : null}
       </div>
-      {waits ? null : <NoticeAnswer notice={notice} />}
+      {notice.answer ? <NoticeAnswer notice={notice} /> : null}
       {open && !answering ? (
         <Button
           className="justify-self-start"
