@@ -15,6 +15,7 @@ export const NAV_ITEMS: readonly NavItem[] = [
   { href: "/engagements", label: "Engagements", rights: ["read book"] },
   { href: "/import", label: "Import", rights: ["import elements"] },
   { href: "/notices", label: "Notices", rights: ["see all notices", "see own notices"] },
+  { href: "/watch", label: "Watch", rights: ["confirm", "second confirmation", "record firing"] },
   { href: "/stations", label: "Stations", rights: ["read book"] },
   { href: "/airspace", label: "Airspace", rights: ["read book"] },
   { href: "/protected", label: "Protected", rights: ["read book"] },
