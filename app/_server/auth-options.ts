@@ -2,10 +2,7 @@ import type { AuthOptions } from "next-auth";
 import Credentials from "next-auth/providers/credentials";
 import { secret } from "@/lib/config";
 import { authorize, type SignedIn } from "./authorize";
-import { overHttps, sessionCookieName } from "./session";
-
-/** One shift and a little: then a person signs in again. */
-const SESSION_S = 12 * 60 * 60;
+import { overHttps, SESSION_S, sessionCookieName } from "./session";
 
 /**
  * Credentials with a signed and encrypted session cookie. The cookie holds the
@@ -28,8 +25,14 @@ export function authOptions(): AuthOptions {
       jwt({ token, user }) {
         // Only what names the session goes into the cookie: `user` is there at sign-in alone.
         const signedIn = user as SignedIn | undefined;
-        if (signedIn) return { sub: signedIn.id, sessionVersion: signedIn.sessionVersion };
-        return { sub: token.sub ?? "", sessionVersion: token.sessionVersion };
+        if (signedIn) {
+          return { sub: signedIn.id, sessionVersion: signedIn.sessionVersion, signedInAtMs: Date.now() };
+        }
+        return {
+          sub: token.sub ?? "",
+          sessionVersion: token.sessionVersion,
+          signedInAtMs: token.signedInAtMs,
+        };
       },
       session: ({ session }) => ({ expires: session.expires }),
     },

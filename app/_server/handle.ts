@@ -54,7 +54,7 @@ async function callerOf({ request, nowMs }: PublicContext): Promise<PersonActor>
     if (!actor) throw unknownCaller();
     return actor;
   }
-  const claims = await readSession(cookieOf(request.headers.get("cookie"), sessionCookieName()));
+  const claims = await readSession(cookieOf(request.headers.get("cookie"), sessionCookieName()), nowMs);
   const actor = claims ? await actorFromSession(claims) : null;
   if (!actor) throw unknownCaller();
   if (!mayWriteWithCookie(request)) throw notAllowed("a change that another site asked for");

@@ -8,7 +8,7 @@ import { readSession, sessionCookieName } from "./session";
 
 /** Who looks at this page, or null; asked once per request. */
 export const currentPerson = cache(async (): Promise<PersonActor | null> => {
-  const claims = await readSession((await cookies()).get(sessionCookieName())?.value);
+  const claims = await readSession((await cookies()).get(sessionCookieName())?.value, Date.now());
   return claims ? actorFromSession(claims) : null;
 });
 

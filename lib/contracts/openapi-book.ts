@@ -8,6 +8,7 @@ import {
   fireInput,
   moveInput,
   type NoticeBody,
+  type NoticeSheetBody,
   noticeQuery,
   scrubInput,
 } from "./engagements";
@@ -91,6 +92,14 @@ export const BOOK: readonly ApiRoute[] = [
     summary: "Notices with the answers in force; a coordinator's own authority's only.",
     query: noticeQuery,
     gives: json<{ notices: NoticeBody[] }>()("Notices, newest first.", "notices"),
+  },
+  {
+    method: "get",
+    path: "/api/notices/{id}",
+    tag: "notices",
+    summary: "One notice with its words as they were sent.",
+    gives: json<NoticeSheetBody>()("The notice.", "id", "subject", "answer"),
+    refusals: [404],
   },
   {
     method: "post",

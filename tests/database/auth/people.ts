@@ -41,10 +41,15 @@ export async function inventAuthority(): Promise<string> {
   return only(await database().insert(authorities).values(values).returning()).id;
 }
 
-/** A session cookie as the sign-in would set it. */
-export async function cookieFor(personId: string, sessionVersion: number, maxAge = 3600): Promise<string> {
+/** A session cookie as the sign-in would set it so many seconds ago. */
+export async function cookieFor(
+  personId: string,
+  sessionVersion: number,
+  { ageS = 0, maxAge = 3600 } = {},
+): Promise<string> {
   const secret = process.env.NEXTAUTH_SECRET ?? "";
-  const token = await encode({ token: { sub: personId, sessionVersion }, secret, maxAge });
+  const signedInAtMs = Date.now() - ageS * 1000;
+  const token = await encode({ token: { sub: personId, sessionVersion, signedInAtMs }, secret, maxAge });
   return `dwellbook.session=${token}`;
 }
 

@@ -61,12 +61,15 @@ describe("a session", () => {
     process.env.NEXTAUTH_SECRET = "another-secret-of-somebody-else-1";
     const forged = await cookieFor(person.id, 1);
     process.env.NEXTAUTH_SECRET = secret ?? "";
-    const old = await cookieFor(person.id, 1, -120);
+    const old = await cookieFor(person.id, 1, { maxAge: -120 });
+    // A cookie that was renewed again and again still counts from its sign-in.
+    const renewed = await cookieFor(person.id, 1, { ageS: 12 * 3600 + 1 });
     const nobody = await cookieFor("00000000-0000-4000-8000-000000000000", 1);
     const notAnId = await cookieFor("1 or 1=1", 1);
     for (const cookie of [
       forged,
       old,
+      renewed,
       nobody,
       notAnId,
       good.slice(0, -3),
@@ -75,7 +78,8 @@ describe("a session", () => {
     ]) {
       expect((await ask({ cookie })).status).toBe(401);
     }
-    expect((await ask({ cookie: good })).status).toBe(200);
+    const long = await cookieFor(person.id, 1, { ageS: 12 * 3600 - 60 });
+    for (const cookie of [good, long]) expect((await ask({ cookie })).status).toBe(200);
   });
 
   it("writes only from our own pages", async () => {
