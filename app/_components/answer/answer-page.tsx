@@ -42,14 +42,13 @@ export function AnswerPage({ token, initial }: { readonly token: string; readonl
           Change the answer
         </Button>
       ) : null}
-      <details className="sheet p-4">
-        <summary className="min-h-8 cursor-pointer font-semibold">The notice in full</summary>
-        <pre className="mt-3 whitespace-pre-wrap font-sans">{body.text}</pre>
+      <details className="sheet p-4" open={body.canAnswer}>
+        <summary className="min-h-8 cursor-pointer font-semibold">
+          The notice in full{isRequest(body) ? ", with the beam’s azimuth and elevation" : ""}
+        </summary>
+        <p className="mt-3 whitespace-pre-line wrap-anywhere">{body.text}</p>
       </details>
-      <p className="text-sm text-quiet">
-        Your answer goes into the engagement book and to the people at the station. It is not a NOTAM and
-        replaces no clearance that other rules ask for.
-      </p>
+      <Meaning body={body} />
     </div>
   );
 }
@@ -62,10 +61,7 @@ function Question({ body }: { readonly body: AnswerPageBody }) {
       <h1 className="mt-1 text-2xl leading-tight font-bold">
         {asking(body)} E-{body.engagementNumber}
       </h1>
-      <p className="mt-2">
-        The laser station {body.stationName} would like to lase the debris fragment {body.fragmentName} for{" "}
-        {durationText((Date.parse(body.dwellTo) - Date.parse(body.dwellFrom)) / 1000)}.
-      </p>
+      <p className="mt-2">{sentenceOf(body)}</p>
       <dl className="mt-4 grid gap-x-4 gap-y-2 sm:grid-cols-[7rem_1fr]">
         <dt className="text-quiet">From</dt>
         <dd className="figures">
@@ -91,7 +87,39 @@ function Question({ body }: { readonly body: AnswerPageBody }) {
 function asking(body: AnswerPageBody): string {
   if (body.kind === "cancellation") return "Cancelled: engagement";
   if (body.kind === "completion") return "Completed: engagement";
-  return body.answer ? "Your answer to engagement" : "May we lase? Engagement";
+  if (body.answer) return "Your answer to engagement";
+  return body.canAnswer ? "May we lase? Engagement" : "Engagement";
+}
+
+function isRequest(body: AnswerPageBody): boolean {
+  return body.kind === "request" || body.kind === "revised request";
+}
+
+/** What it is about, for somebody who has never heard of it. */
+function sentenceOf(body: AnswerPageBody): string {
+  const length = durationText((Date.parse(body.dwellTo) - Date.parse(body.dwellFrom)) / 1000);
+  const target = `the debris fragment ${body.fragmentName}`;
+  if (body.kind === "cancellation") {
+    return `The laser station ${body.stationName} will not point its laser at ${target} in the time below. You need not do anything.`;
+  }
+  if (body.kind === "completion") {
+    return `The laser station ${body.stationName} has finished with ${target}. You need not do anything.`;
+  }
+  return `The laser station ${body.stationName} asks to point its laser at ${target}, a piece of orbital debris, for ${length}, so that it comes down sooner.`;
+}
+
+/** What an answer does, and what it doesn't. */
+function Meaning({ body }: { readonly body: AnswerPageBody }) {
+  if (!isRequest(body)) return null;
+  return (
+    <section className="text-sm text-quiet" aria-label="What an answer means">
+      <p>
+        Your answer goes into the engagement book and to the people at the station. Without it the laser is
+        not fired. It is not a NOTAM, it is no clearance by itself, and it replaces none that other rules ask
+        for.
+      </p>
+    </section>
+  );
 }
 
 function Given({ body }: { readonly body: AnswerPageBody }) {
@@ -105,6 +133,11 @@ function Given({ body }: { readonly body: AnswerPageBody }) {
       </p>
       {conditions ? <p className="mt-1">Conditions: {conditions}</p> : null}
       {reasons ? <p className="mt-1">Reasons: {reasons}</p> : null}
+      {body.canAnswer ? (
+        <p className="mt-2 text-quiet">
+          You can change it from this same page until the dwell begins; the newer answer then counts.
+        </p>
+      ) : null}
     </div>
   );
 }
