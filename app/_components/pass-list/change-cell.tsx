@@ -13,8 +13,9 @@ export function HeightChange(props: { readonly dropM: number; readonly bandM: re
   );
 }
 
-/** `−412 m`, `−13.4 km`. */
+/** `−412 m`, `−13.4 km`, `+0.9 km`: a change always has its sign. */
 export function heightText(changeM: number): string {
-  if (Math.abs(changeM) < 1000) return `${numberText(changeM)} m`;
-  return `${numberText(changeM / 1000, Math.abs(changeM) < 99_950 ? 1 : 0)} km`;
+  const sign = changeM >= 0.5 ? "+" : "";
+  if (Math.abs(changeM) < 999.5) return `${sign}${numberText(changeM)} m`;
+  return `${sign}${numberText(changeM / 1000, Math.abs(changeM) < 99_950 ? 1 : 0)} km`;
 }

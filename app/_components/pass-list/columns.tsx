@@ -31,9 +31,17 @@ export const PASS_COLUMNS: readonly Column<PassBody>[] = [
     ),
   },
   { head: "Highest", figure: true, cell: (p) => `${numberText(p.maxElevationDeg)}°` },
-  { head: "Pass", cell: (p) => <StripOfPass pass={p} size="small" /> },
   {
-    head: "Orbit drops by",
+    head: "Pass",
+    cell: (p) => (
+      // In line, so that the row's words stand beside the strip's middle and not at its foot.
+      <span className="inline-block align-middle">
+        <StripOfPass pass={p} size="small" />
+      </span>
+    ),
+  },
+  {
+    head: "Semi-major axis",
     cell: (p) =>
       p.dwell ? (
         <HeightChange dropM={p.dwell.semiMajorAxisDropM} bandM={p.dwell.semiMajorAxisDropBandM} />
@@ -44,19 +52,21 @@ export const PASS_COLUMNS: readonly Column<PassBody>[] = [
   {
     head: "Perigee",
     cell: (p) =>
-      p.dwell ? <HeightChange dropM={p.dwell.perigeeDropM} bandM={p.dwell.perigeeDropBandM} /> : "",
+      p.dwell ? <HeightChange dropM={p.dwell.perigeeDropM} bandM={p.dwell.perigeeDropBandM} /> : null,
   },
   { head: "State", cell: (p) => <PassState pass={p} /> },
 ];
 
-function NoDwell({ pass }: { readonly pass: PassBody }) {
+/** Why nothing is offered, in the words of the rules. */
+export function NoDwell({ pass }: { readonly pass: PassBody }) {
   if (pass.engagementId) return <span className="text-quiet">booked</span>;
   return (
     <span className="block max-w-56 text-[0.8125rem] text-quiet">{pass.noDwellReason ?? "no dwell"}</span>
   );
 }
 
-function PassState({ pass }: { readonly pass: PassBody }) {
+/** The state of the engagement that holds the pass, or what the rules make of it. */
+export function PassState({ pass }: { readonly pass: PassBody }) {
   const state = STATES.find((s): s is EngagementState => s === pass.engagementState);
   if (pass.engagementId && state) {
     return (

@@ -1,7 +1,7 @@
 "use client";
 
 import { Field } from "@/app/_components/field";
-import { HOUR_CHOICES, type PassFilters } from "./filters";
+import { HOUR_CHOICES, orderOf, type PassFilters } from "./filters";
 
 interface FilterBarProps {
   readonly filters: PassFilters;
@@ -18,7 +18,10 @@ export function FilterBar({ filters, onChange, stations, fragments, nowMs }: Fil
   const midnightMs = Math.floor(nowMs / DAY_MS) * DAY_MS;
   const days = Array.from({ length: 7 }, (_, i) => new Date(midnightMs + (i + 1) * DAY_MS).toISOString());
   return (
-    <form className="flex flex-wrap items-end gap-x-5 gap-y-3" onSubmit={(e) => e.preventDefault()}>
+    <form
+      className="grid grid-cols-2 items-end gap-x-5 gap-y-3 sm:flex sm:flex-wrap"
+      onSubmit={(e) => e.preventDefault()}
+    >
       <Choice
         label="Station"
         value={filters.station}
@@ -41,15 +44,16 @@ export function FilterBar({ filters, onChange, stations, fragments, nowMs }: Fil
         label="Window"
         value={String(filters.hours)}
         onChange={(hours) => onChange({ ...filters, hours: Number(hours) })}
-        options={HOUR_CHOICES.map((h) => [String(h), h === 168 ? "7 d" : `${h} h`] as const)}
+        options={HOUR_CHOICES.map((h) => [String(h), h === 168 ? "7 days" : `${h} h`] as const)}
       />
       <Choice
         label="Order"
         value={filters.sort}
-        onChange={(sort) => onChange({ ...filters, sort: sort === "gain" ? "gain" : "time" })}
+        onChange={(sort) => onChange({ ...filters, sort: orderOf(sort) })}
         options={[
           ["time", "by rise"],
-          ["gain", "by drop"],
+          ["semi-major axis", "by drop of semi-major axis"],
+          ["perigee", "by drop of perigee"],
         ]}
       />
       <label className="flex min-h-10 items-center gap-2">
@@ -65,6 +69,7 @@ export function FilterBar({ filters, onChange, stations, fragments, nowMs }: Fil
   );
 }
 
+/** One choice of the bar. */
 function Choice(props: {
   readonly label: string;
   readonly value: string;

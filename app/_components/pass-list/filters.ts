@@ -1,4 +1,11 @@
+import type { PassBody } from "@/lib/contracts/passes";
+
 const HOUR_MS = 3_600_000;
+
+export const PASS_ORDERS = ["time", "semi-major axis", "perigee"] as const;
+
+/** By rise, or by the greatest drop of the semi-major axis or of the perigee. */
+export type PassOrder = (typeof PASS_ORDERS)[number];
 
 /** What the list shows; it lives in the address bar, so that a view can be kept and sent. */
 export interface PassFilters {
@@ -9,7 +16,7 @@ export interface PassFilters {
   /** Start of the window, ISO with Z; "" is now. */
   readonly from: string;
   readonly worthOnly: boolean;
-  readonly sort: "time" | "gain";
+  readonly sort: PassOrder;
 }
 
 export const HOUR_CHOICES = [12, 24, 48, 168] as const;
@@ -24,8 +31,13 @@ export function readFilters(params: URLSearchParams): PassFilters {
     hours: HOUR_CHOICES.find((h) => h === hours) ?? 24,
     from: Number.isFinite(Date.parse(from)) ? from : "",
     worthOnly: params.get("worth") !== "all",
-    sort: params.get("sort") === "gain" ? "gain" : "time",
+    sort: orderOf(params.get("sort")),
   };
+}
+
+/** An order by its name; by rise when there is none of that name. */
+export function orderOf(text: string | null): PassOrder {
+  return PASS_ORDERS.find((order) => order === text) ?? "time";
 }
 
 /** The address of a view; defaults are left out. */
@@ -51,4 +63,22 @@ export function passesPath(filters: PassFilters, nowMs: number): string {
   if (filters.station) params.set("station", filters.station);
   if (filters.fragment) params.set("fragment", filters.fragment);
   return `/api/passes?${params}`;
+}
+
+/** The passes of a view in its order; those without a dwell come last when sorted by drop. */
+export function arrange(passes: readonly PassBody[], filters: PassFilters): PassBody[] {
+  const kept = passes.filter((p) => !filters.worthOnly || p.dwell !== null || p.engagementId !== null);
+  if (filters.sort === "time") return kept.sort((a, b) => a.riseAt.localeCompare(b.riseAt));
+  const field = filters.sort === "perigee" ? "perigeeDropM" : "semiMajorAxisDropM";
+  const drop = (p: PassBody): number => p.dwell?.[field] ?? Number.NEGATIVE_INFINITY;
+  return kept.sort((a, b) => (drop(a) === drop(b) ? a.riseAt.localeCompare(b.riseAt) : drop(b) - drop(a)));
+}
+
+/** How many passes are shown, and how many the filter leaves out. */
+export function countText(shown: number, all: number, filters: PassFilters): string {
+  const passes = `${shown} ${shown === 1 ? "pass" : "passes"}`;
+  const hidden = all - shown;
+  if (!filters.worthOnly) return passes;
+  const kept = `${passes} worth lasing or booked`;
+  return hidden === 0 ? kept : `${kept}; ${hidden} more closed or not worth it`;
 }

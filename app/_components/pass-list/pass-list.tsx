@@ -11,8 +11,9 @@ import { ErrorNote } from "@/app/_components/error-note";
 import type { PassBody } from "@/lib/contracts/passes";
 import { PASS_COLUMNS } from "./columns";
 import { FilterBar } from "./filter-bar";
-import { type PassFilters, passesPath, readFilters, writeFilters } from "./filters";
+import { arrange, countText, type PassFilters, passesPath, readFilters, writeFilters } from "./filters";
 import { ListSkeleton } from "./list-skeleton";
+import { PassBlocks } from "./pass-blocks";
 
 /** Rows drawn at once; more on demand, so that a week of passes does not weigh on the page. */
 const STEP = 60;
@@ -50,16 +51,24 @@ export function PassList({ nowMs, fragmentId, stations, fragments }: PassListPro
   };
   return (
     <div className="grid gap-4">
-      <FilterBar
-        filters={filters}
-        onChange={change}
-        stations={stations}
-        fragments={fragments}
-        nowMs={nowMs}
-      />
-      <p role="status" className="text-quiet">
-        {data ? countText(rows.length, data.passes.length, filters) : "Reading passes …"}
-      </p>
+      {fragmentId ? null : (
+        <FilterBar
+          filters={filters}
+          onChange={change}
+          stations={stations}
+          fragments={fragments}
+          nowMs={nowMs}
+        />
+      )}
+      <div className="max-w-[90ch] text-quiet">
+        <p role="status">{data ? countText(rows.length, data.passes.length, filters) : "Reading passes …"}</p>
+        {rows.length > 0 ? (
+          <p className="text-[0.8125rem]">
+            Changes by the best dwell that may be proposed now: the median, under it the middle 80 % of
+            outcomes (P10 … P90).
+          </p>
+        ) : null}
+      </div>
       {error ? (
         <div className="grid justify-items-start gap-3">
           <ErrorNote error={error} title="The passes could not be read" />
@@ -69,13 +78,16 @@ export function PassList({ nowMs, fragmentId, stations, fragments }: PassListPro
       {isLoading && !data ? <ListSkeleton /> : null}
       {data && rows.length === 0 ? <NothingHere filters={filters} onChange={change} /> : null}
       {rows.length > 0 ? (
-        <div className="sheet min-w-0 overflow-hidden">
-          <DataTable
-            caption="Passes"
-            columns={PASS_COLUMNS}
-            rows={rows.slice(0, shown)}
-            keyOf={(p) => p.id}
-          />
+        <div className="min-w-0">
+          <div className="hidden md:block">
+            <DataTable
+              caption="Passes"
+              columns={PASS_COLUMNS}
+              rows={rows.slice(0, shown)}
+              keyOf={(p) => p.id}
+            />
+          </div>
+          <PassBlocks passes={rows.slice(0, shown)} className="md:hidden" />
         </div>
       ) : null}
       {rows.length > shown ? (
@@ -85,19 +97,6 @@ export function PassList({ nowMs, fragmentId, stations, fragments }: PassListPro
       ) : null}
     </div>
   );
-}
-
-function arrange(passes: readonly PassBody[], filters: PassFilters): PassBody[] {
-  const kept = passes.filter((p) => !filters.worthOnly || p.dwell !== null || p.engagementId !== null);
-  if (filters.sort === "time") return kept.sort((a, b) => a.riseAt.localeCompare(b.riseAt));
-  return kept.sort((a, b) => (b.dwell?.semiMajorAxisDropM ?? -1) - (a.dwell?.semiMajorAxisDropM ?? -1));
-}
-
-function countText(shown: number, all: number, filters: PassFilters): string {
-  const passes = `${shown} ${shown === 1 ? "pass" : "passes"}`;
-  const hidden = all - shown;
-  if (!filters.worthOnly || hidden === 0) return passes;
-  return `${passes} worth lasing or booked; ${hidden} more closed or not worth it`;
 }
 
 function NothingHere(props: { readonly filters: PassFilters; readonly onChange: (f: PassFilters) => void }) {

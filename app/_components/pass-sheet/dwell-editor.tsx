@@ -3,7 +3,7 @@
 import { type KeyboardEvent, useState } from "react";
 import { Field } from "@/app/_components/field";
 import { utcTimeOfDay } from "@/app/_format/utc";
-import type { Span } from "./use-judgement";
+import { clampEnd, clampStart, readTime, type Span } from "./dwell-time";
 
 interface DwellEditorProps {
   readonly dwell: Span;
@@ -16,23 +16,19 @@ const STEPS_S = [-10, -1, 1, 10] as const;
 
 /** Start and end of a dwell, by typed UTC time, by buttons and by arrow keys (1 s; with Shift 10 s). */
 export function DwellEditor({ dwell, pass, onChange }: DwellEditorProps) {
-  const clampStart = (ms: number): number =>
-    Math.min(Math.max(ms, Math.ceil(pass.fromMs / 1000) * 1000), dwell.toMs - 1000);
-  const clampEnd = (ms: number): number =>
-    Math.max(Math.min(ms, Math.floor(pass.toMs / 1000) * 1000), dwell.fromMs + 1000);
   return (
     <div className="flex flex-wrap gap-x-8 gap-y-4">
       <Edge
         label="Dwell from"
         atMs={dwell.fromMs}
         pass={pass}
-        onChange={(ms) => onChange({ ...dwell, fromMs: clampStart(ms) })}
+        onChange={(ms) => onChange({ ...dwell, fromMs: clampStart(ms, dwell, pass) })}
       />
       <Edge
         label="Dwell to"
         atMs={dwell.toMs}
         pass={pass}
-        onChange={(ms) => onChange({ ...dwell, toMs: clampEnd(ms) })}
+        onChange={(ms) => onChange({ ...dwell, toMs: clampEnd(ms, dwell, pass) })}
       />
     </div>
   );
@@ -66,7 +62,7 @@ function Edge(props: {
     <div>
       <Field
         label={props.label}
-        hint="UTC, hh:mm:ss; arrow keys move it by 1 s, with Shift by 10 s"
+        hint="UTC; arrow up and down: 1 s, with Shift 10 s"
         error={wrong ? "Write a time inside the pass, like 03:12:45." : null}
       >
         {(control) => (
@@ -87,7 +83,7 @@ function Edge(props: {
           <button
             key={s}
             type="button"
-            className="act figures min-h-9 min-w-12"
+            className="figures min-h-9 rounded border border-quiet px-2 text-[0.875rem] whitespace-nowrap hover:bg-ink hover:text-sheet"
             aria-label={`${props.label}: ${s > 0 ? "later" : "earlier"} by ${Math.abs(s)} s`}
             onClick={() => props.onChange(props.atMs + s * 1000)}
           >
@@ -97,17 +93,4 @@ function Edge(props: {
       </div>
     </div>
   );
-}
-
-/** A typed time of day as an instant inside the pass; a pass over midnight may mean the next day. */
-function readTime(text: string, pass: Span): number | null {
-  const match = /^\s*([01]?\d|2[0-3]):?([0-5]\d):?([0-5]\d)\s*Z?\s*$/i.exec(text);
-  if (!match) return null;
-  const ofDayMs = ((Number(match[1]) * 60 + Number(match[2])) * 60 + Number(match[3])) * 1000;
-  const midnightMs = Math.floor(pass.fromMs / 86_400_000) * 86_400_000;
-  for (const dayMs of [midnightMs, midnightMs + 86_400_000]) {
-    const atMs = dayMs + ofDayMs;
-    if (atMs >= pass.fromMs - 1000 && atMs <= pass.toMs + 1000) return atMs;
-  }
-  return null;
 }

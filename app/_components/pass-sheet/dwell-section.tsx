@@ -5,15 +5,16 @@ import { useState } from "react";
 import { Button } from "@/app/_components/button";
 import { Caution } from "@/app/_components/caution";
 import { ErrorNote } from "@/app/_components/error-note";
-import { PassStrip } from "@/app/_components/pass-strip/pass-strip";
 import { Section } from "@/app/_components/section";
 import { StateMark } from "@/app/_components/state-mark";
 import { type EngagementState, STATES } from "@/lib/contracts/common";
 import type { PassSheetBody } from "@/lib/contracts/passes";
 import { DwellEditor } from "./dwell-editor";
+import { DwellStrip } from "./dwell-strip";
+import type { Span } from "./dwell-time";
 import { EffectFigures } from "./effect-figures";
 import { ProposeDialog } from "./propose-dialog";
-import { type Span, spanOf, useJudgement } from "./use-judgement";
+import { spanOf, useJudgement } from "./use-judgement";
 
 /** The dwell of a pass: what it does, where it lies, how to change it and how to propose it. */
 export function DwellSection({
@@ -29,36 +30,21 @@ export function DwellSection({
   const dwell = edited ?? offered;
   const booked = sheet.booked !== null;
   const { judgement, error, isCurrent } = useJudgement(sheet.id, booked || edited === null ? null : dwell);
-  const estimate = edited === null ? sheet.estimate : (judgement?.estimate ?? null);
+  // Until the first answer about a changed dwell is here, the best one's figures keep their place, dimmed.
+  const estimate = edited === null || judgement === null ? sheet.estimate : judgement.estimate;
+  const working = edited !== null && !isCurrent && !error;
   const first = useJudgement(sheet.id, !booked && edited === null ? offered : null);
   const shown = edited === null ? first.judgement : judgement;
   const refusals = edited === null ? [] : (judgement?.refusals ?? []);
   return (
-    <Section
-      title={booked ? "The booked dwell" : "The best dwell"}
-      intro={booked ? undefined : introOf(sheet)}
-    >
-      {estimate ? <EffectFigures estimate={estimate} /> : null}
-      <div className="mt-4">
-        <PassStrip
-          size="large"
-          riseMs={Date.parse(sheet.riseAt)}
-          setMs={Date.parse(sheet.setAt)}
-          elevationDeg={sheet.strip.elevationDeg}
-          worthPerS={sheet.strip.worthPerS}
-          closures={sheet.closures
-            .map((c) => ({
-              fromMs: Date.parse(c.from),
-              toMs: Date.parse(c.to),
-              verdict: c.verdict,
-              label: c.label,
-            }))
-            .sort((a, b) => a.fromMs - b.fromMs)}
-          dwell={dwell}
-          name={`${sheet.fragmentName} over ${sheet.stationName} from ${sheet.riseAt.slice(11, 19)}Z to ${sheet.setAt.slice(11, 19)}Z`}
-        />
-        <StripLegend />
+    <Section title={titleOf(booked, dwell, edited)} intro={booked ? undefined : introOf(sheet)}>
+      <div className={working ? "opacity-50" : ""} aria-busy={working}>
+        {estimate ? <EffectFigures estimate={estimate} /> : null}
       </div>
+      <p role="status" className="text-[0.8125rem] text-quiet">
+        {working ? "Working out the dwell as you set it …" : ""}
+      </p>
+      <DwellStrip sheet={sheet} dwell={dwell} onChange={!booked && mayPropose ? setEdited : null} />
       {booked ? <Booked sheet={sheet} /> : null}
       {!booked && mayPropose && dwell ? (
         <div className="mt-5 grid gap-4">
@@ -105,29 +91,21 @@ export function DwellSection({
           ) : null}
         </div>
       ) : null}
-      {!booked && !mayPropose ? <p className="mt-4 text-quiet">Planners propose dwells.</p> : null}
-      <div className="mt-5">
-        <Caution>
-          An estimate for planning. It is not a safety stop and not a clearance: follow your laser safety
-          officer, your air unit and local codes.
-        </Caution>
-      </div>
+      {!booked && !mayPropose ? <p className="mt-4 text-quiet">Only planners propose dwells.</p> : null}
+      <Caution />
     </Section>
   );
+}
+
+function titleOf(booked: boolean, dwell: Span | null, edited: Span | null): string {
+  if (booked) return "The booked dwell";
+  if (dwell === null) return "No dwell to propose";
+  return edited === null ? "The best dwell" : "Your dwell";
 }
 
 function introOf(sheet: PassSheetBody): string {
   if (sheet.dwell === null) return sheet.noDwellReason ?? "No stretch of this pass can be lased.";
   return "The open stretch that gains most in the aim, after acquisition and inside every limit of the station.";
-}
-
-function StripLegend() {
-  return (
-    <p className="mt-1 text-[0.8125rem] text-quiet">
-      Line: elevation. Amber: seconds that lower the orbit. Pale, under the line: seconds that would raise it.
-      Hatched: closed, not checked or pending. Bar: the dwell.
-    </p>
-  );
 }
 
 function Booked({ sheet }: { readonly sheet: PassSheetBody }) {

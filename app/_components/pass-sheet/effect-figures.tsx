@@ -11,31 +11,37 @@ export function EffectFigures({ estimate }: { readonly estimate: EstimateBody })
   const seconds = (Date.parse(estimate.to) - Date.parse(estimate.from)) / 1000;
   const { radialMPerS, transverseMPerS, normalMPerS } = estimate.deltaV;
   return (
-    <Figures label="What the dwell does">
-      <Figure
-        value={change(estimate.semiMajorAxisAfterKm.p50, estimate.semiMajorAxisBeforeKm)}
-        label={`semi-major axis, median (${band(estimate.semiMajorAxisAfterKm, estimate.semiMajorAxisBeforeKm)})`}
-        note={BAND}
-      />
-      <Figure
-        value={change(estimate.perigeeAfterKm.p50, estimate.perigeeBeforeKm)}
-        label={`perigee, median (${band(estimate.perigeeAfterKm, estimate.perigeeBeforeKm)})`}
-        note={`${BAND}; J2-mean perigee ${numberText(estimate.perigeeBeforeKm, 1)} km before`}
-      />
-      <Figure value={durationText(seconds)} label={`dwell, ${numberText(estimate.pulses)} pulses`} />
-      <Figure
-        value={energy.value}
-        unit={energy.unit}
-        label="laser energy sent"
-        note="pulses times pulse energy"
-      />
-      <Figure
-        value={numberText(Math.hypot(radialMPerS, transverseMPerS, normalMPerS), 1)}
-        unit="m/s"
-        label={`Δv: radial ${numberText(radialMPerS, 1)}, along ${numberText(transverseMPerS, 1)}, across ${numberText(normalMPerS, 1)} m/s`}
-        note="summed along the dwell from the exact state at each step"
-      />
-    </Figures>
+    <div>
+      <Figures label="What the dwell does">
+        <Figure
+          value={change(estimate.semiMajorAxisAfterKm.p50, estimate.semiMajorAxisBeforeKm)}
+          label={`semi-major axis (${band(estimate.semiMajorAxisAfterKm, estimate.semiMajorAxisBeforeKm)})`}
+          note={BAND}
+        />
+        <Figure
+          value={change(estimate.perigeeAfterKm.p50, estimate.perigeeBeforeKm)}
+          label={`perigee (${band(estimate.perigeeAfterKm, estimate.perigeeBeforeKm)})`}
+          note={`${BAND}; J2-mean perigee ${numberText(estimate.perigeeBeforeKm, 1)} km before`}
+        />
+        <Figure value={durationText(seconds)} label={`dwell, ${numberText(estimate.pulses)} pulses`} />
+        <Figure
+          value={energy.value}
+          unit={energy.unit}
+          label="laser energy sent"
+          note="pulses times pulse energy"
+        />
+        <Figure
+          value={numberText(Math.hypot(radialMPerS, transverseMPerS, normalMPerS), 1)}
+          unit="m/s"
+          label={`velocity change: upward ${numberText(radialMPerS, 1)}, along track ${numberText(transverseMPerS, 1)}, across ${numberText(normalMPerS, 1)} m/s`}
+          note="summed along the dwell from the exact state at each step"
+        />
+      </Figures>
+      <p className="mt-2 max-w-[80ch] text-[0.8125rem] text-quiet">
+        Median of the outcomes; in brackets the middle 80 % of them (P10 … P90), from what is not known of
+        mass, area, coupling and pointing.
+      </p>
+    </div>
   );
 }
 

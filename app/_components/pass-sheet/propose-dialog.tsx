@@ -11,7 +11,7 @@ import { UtcTime } from "@/app/_components/utc-time";
 import { durationText } from "@/app/_format/figures";
 import type { EngagementBody } from "@/lib/contracts/engagements";
 import type { JudgementBody, PassSheetBody } from "@/lib/contracts/passes";
-import type { Span } from "./use-judgement";
+import type { Span } from "./dwell-time";
 
 interface ProposeDialogProps {
   readonly open: boolean;
@@ -53,8 +53,8 @@ export function ProposeDialog({ open, onClose, sheet, dwell, judgement }: Propos
       <ul className="mt-1 grid gap-2">
         {judgement.concerned.map((c) => (
           <li key={c.authorityId}>
-            <span className="font-semibold">{c.name}</span> ({c.kind}): {c.because} It asks for{" "}
-            {c.leadTimeMin} min of notice, so an answer is due by{" "}
+            <span className="font-semibold">{c.name}</span> ({c.kind}): {c.because} The request must reach it{" "}
+            {durationText(c.leadTimeMin * 60)} before the dwell, by{" "}
             <UtcTime at={dwell.fromMs - c.leadTimeMin * 60_000} show="short" />.
           </li>
         ))}
@@ -62,7 +62,7 @@ export function ProposeDialog({ open, onClose, sheet, dwell, judgement }: Propos
       {judgement.notChecked.length > 0 ? (
         <p className="mt-4">
           Not checked, and to be attested by a person before confirmation:{" "}
-          {judgement.notChecked.map((c) => c.cause).join(" ")}
+          {[...new Set(judgement.notChecked.map((c) => c.cause))].join(" ")}
         </p>
       ) : null}
       <p className="mt-4 text-quiet">

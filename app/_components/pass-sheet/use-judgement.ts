@@ -4,11 +4,9 @@ import { useEffect, useState } from "react";
 import useSWR from "swr";
 import { fetchJson } from "@/app/_client/fetch-json";
 import type { JudgementBody } from "@/lib/contracts/passes";
+import type { Span } from "./dwell-time";
 
-export interface Span {
-  readonly fromMs: number;
-  readonly toMs: number;
-}
+export type { Span } from "./dwell-time";
 
 /** Wait after the last change of the dwell before the server is asked, so that a held key asks once. */
 const SETTLE_MS = 180;

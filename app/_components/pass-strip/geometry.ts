@@ -4,12 +4,14 @@ export interface StripFrame {
   readonly height: number;
   readonly left: number;
   readonly right: number;
-  /** y of the ground line (0° elevation, no worth). */
+  /** y of the ground line (the floor's elevation, no worth). */
   readonly groundY: number;
   /** y of 90° elevation. */
   readonly topY: number;
   /** Greatest depth of the harm area below the ground line. */
   readonly harmDepth: number;
+  /** Elevation at the ground line, degrees: see {@link floorOf}. */
+  readonly floorDeg: number;
   readonly fromMs: number;
   readonly toMs: number;
 }
@@ -20,9 +22,21 @@ export function xOf(frame: StripFrame, atMs: number): number {
   return frame.left + Math.min(1, Math.max(0, share)) * (frame.width - frame.left - frame.right);
 }
 
-/** y of an elevation in degrees. */
+/** The instant at an x, within the pass: what a finger on the strip means. */
+export function msAt(frame: StripFrame, x: number): number {
+  const share = (x - frame.left) / (frame.width - frame.left - frame.right);
+  return frame.fromMs + Math.min(1, Math.max(0, share)) * (frame.toMs - frame.fromMs);
+}
+
+/** y of an elevation in degrees; below the floor it stays on the ground line. */
 export function yOf(frame: StripFrame, elevationDeg: number): number {
-  return frame.groundY - (elevationDeg / 90) * (frame.groundY - frame.topY);
+  const share = Math.max(0, (elevationDeg - frame.floorDeg) / (90 - frame.floorDeg));
+  return frame.groundY - share * (frame.groundY - frame.topY);
+}
+
+/** The elevation at which the arch touches the ground: its lowest, which is where it rises and sets. */
+export function floorOf(elevationDeg: readonly number[]): number {
+  return elevationDeg.length === 0 ? 0 : Math.min(89, ...elevationDeg);
 }
 
 const round = (value: number): string => value.toFixed(1);

@@ -1,13 +1,8 @@
-import { useId } from "react";
-import { archPath, type StripFrame, worthPath, xOf, yOf } from "./geometry";
-
-export interface StripClosure {
-  readonly fromMs: number;
-  readonly toMs: number;
-  readonly verdict: "closed" | "pending" | "not checked";
-  /** Two or three words: "payload QS-88, 1.9°". */
-  readonly label: string;
-}
+import { type ReactNode, useId } from "react";
+import { ClosureMarks, HatchPatterns, type StripClosure } from "./closure-marks";
+import { DwellBar } from "./dwell-bar";
+import { archPath, floorOf, type StripFrame, worthPath, yOf } from "./geometry";
+import { LARGE_LAYOUTS, STRIP_SIZES, type StripLayout } from "./strip-sizes";
 
 export interface StripProps {
   readonly size: "small" | "medium" | "large";
@@ -20,47 +15,41 @@ export interface StripProps {
   /** What the picture shows, in one sentence: its accessible name. */
   readonly name: string;
   readonly className?: string;
+  /** Handles over the large picture, drawn in its frame. */
+  readonly handles?: (frame: StripFrame) => ReactNode;
 }
-
-const SIZES = {
-  small: { width: 180, height: 42, left: 2, right: 2, groundY: 32, topY: 3, harmDepth: 4 },
-  medium: { width: 320, height: 96, left: 4, right: 4, groundY: 72, topY: 6, harmDepth: 9 },
-  large: { width: 760, height: 204, left: 4, right: 4, groundY: 142, topY: 26, harmDepth: 14 },
-  largeNarrow: { width: 350, height: 190, left: 4, right: 4, groundY: 132, topY: 26, harmDepth: 12 },
-} as const;
-
-const HATCH: Record<StripClosure["verdict"], { angle: number; opacity: number; gap: number }> = {
-  closed: { angle: 55, opacity: 0.75, gap: 5 },
-  pending: { angle: -55, opacity: 0.35, gap: 8 },
-  "not checked": { angle: 0, opacity: 0.45, gap: 4 },
-};
 
 /**
  * The pass strip: one pass as an arch over its seconds. Amber under the arch is
- * worth, below the ground line harm, hatching a closure, the bar under the
- * ground line the dwell. The large size writes times and causes, and is drawn a
- * second time for narrow screens so that its words keep their size.
+ * worth, below the ground line harm, hatching a closure, a dotted line on top
+ * what is pending, the bar under the ground line the dwell. The large size
+ * writes times and causes, and is drawn anew for each width of screen.
  */
 export function PassStrip(props: StripProps) {
   if (props.size !== "large") return <StripPicture {...props} layout={props.size} />;
-  return (
-    <>
-      <StripPicture {...props} layout="large" className={`hidden sm:block ${props.className ?? ""}`} />
-      <StripPicture {...props} layout="largeNarrow" className={`sm:hidden ${props.className ?? ""}`} />
-    </>
-  );
+  return LARGE_LAYOUTS.map(({ layout, className }) => (
+    <div key={layout} className={`relative ${className} ${props.className ?? ""}`}>
+      <StripPicture {...props} layout={layout} className="" />
+      {props.handles?.(frameOf(props, layout))}
+    </div>
+  ));
 }
 
-function StripPicture(props: StripProps & { layout: keyof typeof SIZES }) {
+function frameOf(props: StripProps, layout: StripLayout): StripFrame {
+  const { riseMs: fromMs, setMs: toMs, elevationDeg } = props;
+  return { ...STRIP_SIZES[layout], floorDeg: floorOf(elevationDeg), fromMs, toMs };
+}
+
+function StripPicture(props: StripProps & { readonly layout: StripLayout }) {
   const hatchId = useId();
-  const frame: StripFrame = { ...SIZES[props.layout], fromMs: props.riseMs, toMs: props.setMs };
-  const large = props.layout === "large" || props.layout === "largeNarrow";
+  const frame = frameOf(props, props.layout);
+  const large = props.size === "large";
   return (
     <svg
       viewBox={`0 0 ${frame.width} ${frame.height}`}
       role="img"
       aria-label={props.name}
-      className={`block ${large ? "h-auto w-full" : "h-auto max-w-full"} ${props.className ?? ""}`}
+      className={`block h-auto ${large ? "w-full" : "max-w-full"} ${props.className ?? ""}`}
       {...(large ? {} : { width: frame.width, height: frame.height })}
     >
       <HatchPatterns id={hatchId} />
@@ -74,7 +63,7 @@ function StripPicture(props: StripProps & { layout: keyof typeof SIZES }) {
         strokeWidth={large ? 2.2 : 1.6}
         strokeLinejoin="round"
       />
-      <Closures frame={frame} closures={props.closures} hatchId={hatchId} written={large} />
+      <ClosureMarks frame={frame} closures={props.closures} hatchId={hatchId} written={large} />
       <line
         x1={frame.left}
         x2={frame.width - frame.right}
@@ -87,137 +76,29 @@ function StripPicture(props: StripProps & { layout: keyof typeof SIZES }) {
   );
 }
 
-function HatchPatterns({ id }: { id: string }) {
-  return (
-    <defs>
-      {Object.entries(HATCH).map(([verdict, h]) => (
-        <pattern
-          key={verdict}
-          id={`${id}-${verdict.replace(" ", "-")}`}
-          width={h.gap}
-          height={h.gap}
-          patternUnits="userSpaceOnUse"
-          patternTransform={`rotate(${h.angle})`}
-        >
-          <line x1={0} y1={0} x2={0} y2={h.gap} stroke="var(--shut)" strokeWidth={2.2} opacity={h.opacity} />
-        </pattern>
-      ))}
-    </defs>
-  );
-}
-
-function ElevationGrid({ frame }: { frame: StripFrame }) {
-  return [30, 60].map((deg) => (
-    <g key={deg}>
-      <line
-        x1={frame.left}
-        x2={frame.width - frame.right}
-        y1={yOf(frame, deg)}
-        y2={yOf(frame, deg)}
-        stroke="var(--line)"
-      />
-      <text
-        x={frame.width - frame.right}
-        y={yOf(frame, deg) - 4}
-        textAnchor="end"
-        fontSize={11}
-        fill="var(--quiet)"
-        className="font-mono"
-      >
-        {deg}°
-      </text>
-    </g>
-  ));
-}
-
-function Closures(props: {
-  frame: StripFrame;
-  closures: readonly StripClosure[];
-  hatchId: string;
-  written: boolean;
-}) {
-  const { frame } = props;
-  let labelEnd = Number.NEGATIVE_INFINITY;
-  return props.closures.map((c) => {
-    const x1 = xOf(frame, c.fromMs);
-    // A crossing of a second would be a hair: it is drawn at least two pixels wide.
-    const width = Math.max(2, xOf(frame, c.toMs) - x1);
-    const middle = x1 + width / 2;
-    const half = c.label.length * 3.1;
-    const place = Math.min(Math.max(middle, frame.left + half), frame.width - frame.right - half);
-    // A label that would run into its neighbour is left to the list under the picture.
-    const shown = props.written && c.verdict === "closed" && place - half > labelEnd + 6;
-    if (shown) labelEnd = place + half;
-    return (
-      <g key={`${c.fromMs}-${c.toMs}-${c.label}`}>
-        <title>{c.label}</title>
-        {c.verdict === "closed" ? (
-          <rect
-            x={x1}
-            y={frame.topY - 4}
-            width={width}
-            height={frame.groundY - frame.topY + 4}
-            fill="var(--sheet)"
-          />
-        ) : null}
-        <rect
-          x={x1}
-          y={frame.topY - 4}
-          width={width}
-          height={frame.groundY - frame.topY + 4}
-          fill={`url(#${props.hatchId}-${c.verdict.replace(" ", "-")})`}
+/** Lines at 30° and 60° where they stand clear of the ground line. */
+function ElevationGrid({ frame }: { readonly frame: StripFrame }) {
+  return [30, 60]
+    .filter((deg) => deg > frame.floorDeg + 8)
+    .map((deg) => (
+      <g key={deg}>
+        <line
+          x1={frame.left}
+          x2={frame.width - frame.right}
+          y1={yOf(frame, deg)}
+          y2={yOf(frame, deg)}
+          stroke="var(--line)"
         />
-        {shown ? (
-          <text x={place} y={frame.topY - 10} textAnchor="middle" fontSize={12} fill="var(--quiet)">
-            {c.label}
-          </text>
-        ) : null}
-      </g>
-    );
-  });
-}
-
-const clock = (ms: number): string => new Date(ms).toISOString().slice(11, 19);
-
-function DwellBar(props: { frame: StripFrame; dwell: { fromMs: number; toMs: number }; written: boolean }) {
-  const { frame, dwell } = props;
-  const x1 = xOf(frame, dwell.fromMs);
-  const x2 = Math.max(x1 + 2, xOf(frame, dwell.toMs));
-  const top = frame.groundY + (props.written ? 8 : 4);
-  const height = props.written ? 14 : 4;
-  if (!props.written) return <rect x={x1} y={top} width={x2 - x1} height={height} fill="var(--dwell)" />;
-  const narrow = frame.width < 500;
-  return (
-    <g className="font-mono" fontSize={13} fontWeight={600} fill="var(--dwell)">
-      <rect x={x1} y={top} width={x2 - x1} height={height} />
-      <line x1={x1} x2={x1} y1={frame.groundY} y2={top + height + 6} stroke="var(--dwell)" strokeWidth={2} />
-      <line x1={x2} x2={x2} y1={frame.groundY} y2={top + height + 6} stroke="var(--dwell)" strokeWidth={2} />
-      {narrow ? (
         <text
-          x={Math.min(Math.max((x1 + x2) / 2, 76), frame.width - 76)}
-          y={top + height + 20}
-          textAnchor="middle"
+          x={frame.width - frame.right}
+          y={yOf(frame, deg) - 4}
+          textAnchor="end"
+          fontSize={11.5}
+          fill="var(--quiet)"
+          className="figures"
         >
-          {clock(dwell.fromMs)}–{clock(dwell.toMs)}Z
+          {deg}°
         </text>
-      ) : (
-        <>
-          <text
-            x={x1 > 80 ? x1 - 8 : x1}
-            y={x1 > 80 ? top + 12 : top + height + 20}
-            textAnchor={x1 > 80 ? "end" : "start"}
-          >
-            {clock(dwell.fromMs)}
-          </text>
-          <text
-            x={frame.width - x2 > 90 ? x2 + 8 : x2}
-            y={frame.width - x2 > 90 ? top + 12 : top + height + 20}
-            textAnchor={frame.width - x2 > 90 ? "start" : "end"}
-          >
-            {clock(dwell.toMs)}Z
-          </text>
-        </>
-      )}
-    </g>
-  );
+      </g>
+    ));
 }
