@@ -3,11 +3,11 @@ import { blankSegment, evaluate, fitSegment, type HermiteSegment } from "../orbi
 import { blankSighting, type Sight, type Sighting, sightAt } from "./sight";
 
 /**
- * A stretch is looked at in parts of a minute, in eight of them when it is longer (it is then at most 0.3
- * radians of its orbit): within one part the elevation has at most one extremum.
+ * A stretch is looked at in parts of a minute or so, at most in so many: a sixteenth of a radian of a low orbit,
+ * a thirtieth of others. Within one part the elevation has at most one extremum.
  */
 const PART_MS = 60_000;
-const MOST_PARTS = 8;
+const MOST_PARTS = 12;
 
 /**
  * One stretch between two SGP4 nodes, with positions in between, shared by all stations. A search keeps one

@@ -7,6 +7,7 @@ import {
   TWO_PI,
 } from "../constants";
 import type { EarthFixedNode } from "../orbit/earth-fixed";
+import { unit, type Vec3 } from "../vector";
 import type { Sight } from "./sight";
 
 /** A stretch of time outside of which the object cannot be above a station's limit; Unix ms. */
@@ -16,13 +17,13 @@ export interface Window {
 }
 
 /** Revolutions that one state is trusted to look ahead. */
-const REVOLUTIONS_AHEAD = 2;
+const REVOLUTIONS_AHEAD = 3;
 
 /**
  * Allowances, radians. Off the plane: geodetic against geocentric vertical (0.2°) and the turn of the plane
  * by J2. Along the orbit: what drag and the short-period terms do to the phase. Measured on 1,200 real sets,
- * the osculating orbit is off by 0.2°, 0.3°, 0.5° off the plane and by 0.4°, 1.0°, 2.1° along the orbit after
- * one, two, three revolutions.
+ * the osculating orbit is off by 0.2°, 0.3°, 0.5°, 0.6° off the plane and by 0.4°, 1.0°, 2.1°, 3.7° along the
+ * orbit after one, two, three, four revolutions. An orbit that does worse is not searched by skipping.
  */
 const OFF_PLANE_ALLOWANCE_RAD = 1.2 * DEG;
 const PHASE_ALLOWANCE_RAD = 0.5 * DEG;
@@ -58,8 +59,8 @@ export function visibilityHalfAngle(sight: Sight, radiusKm: number): number {
   return Math.acos(Math.min(1, cosine)) - limit;
 }
 
-/** Whether passes of an orbit with this eccentricity and apogee (km from the centre) can be found by skipping. */
-export function canSkip(sights: readonly Sight[], eccentricity: number, apogeeKm: number): boolean {
+/** Whether an orbit of this eccentricity and apogee (km from the centre) lies low enough for skipping. */
+export function isLow(sights: readonly Sight[], eccentricity: number, apogeeKm: number): boolean {
   if (apogeeKm > FARTHEST_SKIPPING_KM || eccentricity > MOST_ECCENTRIC_SKIPPING) return false;
   return sights.every((s) => visibilityHalfAngle(s, apogeeKm) < WIDEST_SKIPPING_RAD);
 }
@@ -109,10 +110,10 @@ interface Phase {
 
 const scratch: Phase = { along: 0, across: 0, off: 0 };
 
-/** The station's direction after some seconds, as cosines along p, q, n, written into `scratch`. */
-function stationAfter(plane: Plane, sight: Sight, seconds: number): Phase {
+/** An Earth-fixed direction after some seconds, as cosines along p, q, n, written into `scratch`. */
+function stationAfter(plane: Plane, direction: Vec3, seconds: number): Phase {
   const turn = EARTH_ROTATION_RAD_PER_S * seconds;
-  const { x, y, z } = sight.direction;
+  const { x, y, z } = direction;
   const c = Math.cos(turn);
   const s = Math.sin(turn);
   const a = c * x - s * y;
@@ -129,7 +130,7 @@ const FIRST_ESTIMATE = 0.1;
 
 /**
  * The next stretch, from the node on, in which the object can stand above the station's limit; within the
- * next two revolutions. When there is none the window is empty and starts where the look-ahead ends.
+ * next three revolutions. When there is none the window is empty and starts where the look-ahead ends.
  *
  * A station sees the object only near the moment when both have the same phase along the orbit's plane, and
  * only if the station is then near that plane. So those moments are computed, one per revolution, and the
@@ -141,17 +142,17 @@ export function nextWindow(plane: Plane, sight: Sight): Window {
   const sinReach = Math.sin(reach);
   const cosReach = Math.cos(reach);
   const horizonS = REVOLUTIONS_AHEAD * plane.periodS;
-  let station = stationAfter(plane, sight, 0);
+  let station = stationAfter(plane, sight.direction, 0);
   let phase = Math.atan2(station.across, station.along);
   for (;;) {
     let meetingS = secondsToSweep(plane, phase);
     if (meetingS - plane.periodS > horizonS) break;
-    station = stationAfter(plane, sight, meetingS);
+    station = stationAfter(plane, sight.direction, meetingS);
     if (Math.abs(station.off) <= sinReach + FIRST_ESTIMATE) {
       for (let step = 0; step < 2; step++) {
         phase = nearestTurn(Math.atan2(station.across, station.along), phase);
         meetingS = secondsToSweep(plane, phase);
-        station = stationAfter(plane, sight, meetingS);
+        station = stationAfter(plane, sight.direction, meetingS);
       }
       if (Math.abs(station.off) <= sinReach) {
         const half =
@@ -170,6 +171,24 @@ export function nextWindow(plane: Plane, sight: Sight): Window {
 
 function phaseAllowance(turns: number): number {
   return PHASE_ALLOWANCE_RAD + PHASE_ALLOWANCE_PER_TURN_RAD * Math.max(0, turns);
+}
+
+/**
+ * Whether what a node foretells of a later node of the same orbit, some revolutions on, is well within the
+ * allowances: a quarter of them is kept for places in between.
+ */
+export function foretells(node: EarthFixedNode, later: EarthFixedNode): boolean {
+  const plane = planeAt(node);
+  const seconds = (later.atMs - node.atMs) / 1000;
+  const place = stationAfter(plane, directionOf(later), seconds);
+  const phase = nearestTurn(Math.atan2(place.across, place.along), plane.meanMotion * seconds);
+  const lateRad = (secondsToSweep(plane, phase) - seconds) * plane.meanMotion;
+  const allowed = 0.75 * phaseAllowance(seconds / plane.periodS);
+  return Math.abs(lateRad) < allowed && Math.abs(place.off) < 0.75 * OFF_PLANE_ALLOWANCE_RAD;
+}
+
+function directionOf(node: EarthFixedNode): Vec3 {
+  return unit({ x: node.x, y: node.y, z: node.z });
 }
 
 /** The turn of an angle that lies nearest to another angle. */
