@@ -27,7 +27,9 @@ let cached: Config | undefined;
  * wrong; secrets have no default: {@link secret} refuses an empty one at first use.
  */
 export function config(): Config {
-  cached ??= schema.parse(Object.fromEntries(Object.entries(process.env).filter(([, value]) => value !== "")));
+  cached ??= schema.parse(
+    Object.fromEntries(Object.entries(process.env).filter(([, value]) => value !== "")),
+  );
   return cached;
 }
 

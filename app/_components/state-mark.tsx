@@ -1,5 +1,5 @@
-import type { EngagementState } from "@/lib/contracts/common";
 import type { Verdict } from "@/lib/contracts/passes";
+import type { EngagementState } from "@/lib/engagement/states";
 
 /**
  * The state of an engagement, or the verdict of a rule: a word in an edge of

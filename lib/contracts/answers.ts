@@ -1,5 +1,6 @@
 import { z } from "zod";
-import { type EngagementState, OUTCOMES } from "./common";
+import type { EngagementState } from "@/lib/engagement/states";
+import { OUTCOMES } from "./common";
 
 /** An authority's answer; the words an outcome needs are asked for by name. */
 export const answerInput = z

@@ -20,8 +20,6 @@ export interface ErrorBody {
 export const ROLES = ["planner", "operator", "coordinator", "administrator"] as const;
 export type Role = (typeof ROLES)[number];
 
-export { type EngagementState, STATES } from "@/lib/engagement/states";
-
 export const OUTCOMES = ["no objection", "no objection with conditions", "objection"] as const;
 export type AnswerOutcome = (typeof OUTCOMES)[number];
 

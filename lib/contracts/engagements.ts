@@ -1,5 +1,6 @@
 import { z } from "zod";
-import { type EngagementState, identifierText, instantText, type SpanBody } from "./common";
+import type { EngagementState } from "@/lib/engagement/states";
+import { identifierText, instantText, type SpanBody } from "./common";
 import type { ClosureBody, EstimateBody } from "./passes";
 
 export const bookInput = z.strictObject({ passId: identifierText, from: instantText, to: instantText });

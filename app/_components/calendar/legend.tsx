@@ -1,5 +1,5 @@
 import { StateMark } from "@/app/_components/state-mark";
-import { STATES } from "@/lib/contracts/common";
+import { STATES } from "@/lib/engagement/states";
 
 /** What the edges in the grid mean. */
 export function Legend() {

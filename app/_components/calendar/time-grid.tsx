@@ -75,7 +75,7 @@ export default function TimeGrid(props: TimeGridProps) {
       eventOrder="rank"
       events={events}
       eventContent={({ event }) => <EntryContent event={event} />}
-      eventDidMount={({ el, event }) => el.setAttribute("aria-label", String(event.extendedProps.name))}
+      eventDidMount={({ el, event }) => nameEntry(el, String(event.extendedProps.name))}
       eventClick={({ event }) => onPick(pickOf(event))}
       eventAllow={allowMove}
       eventDrop={({ event, revert }) => moved(event, revert)}
@@ -100,6 +100,12 @@ function allowMove(span: DateSpanApi): boolean {
   return span.end.getTime() > span.start.getTime();
 }
 
+/** The calendar makes its entries focusable, but gives them neither a role nor a name. */
+function nameEntry(el: HTMLElement, name: string): void {
+  el.setAttribute("role", "button");
+  el.setAttribute("aria-label", name);
+}
+
 function pickOf(event: EventApi): { engagement: EngagementBody } | { offer: OfferEntry } {
   const { engagement, offer } = event.extendedProps as { engagement?: EngagementBody; offer?: OfferEntry };
   if (engagement) return { engagement };
@@ -110,7 +116,8 @@ function pickOf(event: EventApi): { engagement: EngagementBody } | { offer: Offe
 function engagementEvent(engagement: EngagementBody, personId: string): EventInput {
   const movable = mayDrag(engagement, personId);
   return {
-    id: engagement.id,
+    // With its version: a changed entry is drawn anew, and named anew.
+    id: `${engagement.id} ${engagement.version}`,
     title: `E-${engagement.number}`,
     start: engagement.from,
     end: engagement.to,
@@ -134,8 +141,14 @@ function offerEvent(offer: OfferEntry): EventInput {
 }
 
 function EntryContent({ event }: { readonly event: EventApi }) {
-  const { engagement } = event.extendedProps as { engagement?: EngagementBody };
-  if (!engagement) return <span className="entry-words">{event.title}</span>;
+  const { engagement, offer } = event.extendedProps as { engagement?: EngagementBody; offer?: OfferEntry };
+  if (!engagement) {
+    return (
+      <span className="entry-words">
+        {event.title} {offer?.pass.stationName}
+      </span>
+    );
+  }
   return (
     <span className="entry-words">
       <b>{event.title}</b> {engagement.state} <span className="figures">{utcTimeOfDay(engagement.from)}</span>{" "}

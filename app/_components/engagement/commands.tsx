@@ -20,6 +20,15 @@ const LABELS: Record<Name, string> = {
 };
 const ORDER: readonly Name[] = ["confirm", "fire", "move", "scrub"];
 
+/**
+ * Whether a command belongs to a state at all. What an engagement is past, or is not yet near, would be
+ * refused for one reason alone, which its state tells already.
+ */
+function fits(name: Name, state: EngagementSheetBody["state"]): boolean {
+  if (state === "confirmed") return name !== "confirm";
+  return (state === "proposed" || state === "cleared") && name !== "fire";
+}
+
 interface CommandsProps {
   readonly sheet: EngagementSheetBody;
   readonly onChanged: (body: EngagementBody) => void;
@@ -28,10 +37,9 @@ interface CommandsProps {
 /** What the viewer may do now; what is refused says why in words. */
 export function Commands({ sheet, onChanged }: CommandsProps) {
   const [open, setOpen] = useState<Name | null>(null);
-  const commands = ORDER.flatMap((name) => sheet.commands.filter((c) => c.command === name)).map((c) => ({
-    name: c.command,
-    refusals: refusalsBefore(c, sheet),
-  }));
+  const commands = ORDER.flatMap((name) => sheet.commands.filter((c) => c.command === name))
+    .filter((c) => fits(c.command, sheet.state))
+    .map((c) => ({ name: c.command, refusals: refusalsBefore(c, sheet) }));
   const close = (): void => setOpen(null);
   const done = (body: EngagementBody, words: string): void => {
     close();
@@ -39,9 +47,6 @@ export function Commands({ sheet, onChanged }: CommandsProps) {
     onChanged(body);
   };
   if (commands.length === 0) return null;
-  // An engagement that has ended refuses everything for one reason, which its state tells already.
-  const ended = ["fired", "scrubbed", "lapsed"].includes(sheet.state);
-  if (ended) return null;
   const refused = commands.filter((c) => c.refusals.length > 0);
   return (
     <section aria-label="What you may do" className="grid gap-3">

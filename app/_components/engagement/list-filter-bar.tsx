@@ -1,7 +1,7 @@
 "use client";
 
 import { Field } from "@/app/_components/field";
-import { STATES } from "@/lib/contracts/common";
+import { STATES } from "@/lib/engagement/states";
 import { type EngagementFilters, WHENS, type When } from "./list-filters";
 
 interface ListFilterBarProps {

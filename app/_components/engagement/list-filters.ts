@@ -1,4 +1,4 @@
-import { type EngagementState, STATES } from "@/lib/contracts/common";
+import { type EngagementState, STATES } from "@/lib/engagement/states";
 
 const DAY_MS = 86_400_000;
 

@@ -2,8 +2,8 @@ import Link from "next/link";
 import { StateMark } from "@/app/_components/state-mark";
 import { UtcTime } from "@/app/_components/utc-time";
 import { durationText } from "@/app/_format/figures";
-import { type EngagementState, STATES } from "@/lib/contracts/common";
 import type { FragmentSheetBody } from "@/lib/contracts/fragments";
+import { type EngagementState, STATES } from "@/lib/engagement/states";
 
 /** The engagements of a fragment as lines. */
 export function FragmentEngagements({ engagements }: Pick<FragmentSheetBody, "engagements">) {

@@ -4,8 +4,8 @@ import { StripOfPass } from "@/app/_components/pass-strip/strip-of-pass";
 import { StateMark } from "@/app/_components/state-mark";
 import { UtcTime } from "@/app/_components/utc-time";
 import { durationText, numberText } from "@/app/_format/figures";
-import { type EngagementState, STATES } from "@/lib/contracts/common";
 import type { PassBody } from "@/lib/contracts/passes";
+import { type EngagementState, STATES } from "@/lib/engagement/states";
 import { HeightChange } from "./change-cell";
 
 /** The columns of every list of passes. */

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { airspace } from "@/lib/planning/closures/airspace";
 import type { AnswerFacts, VolumeFacts } from "@/lib/planning/pass-facts";
-import { after, brief, OPEN, PASS, span } from "./facts";
+import { brief, OPEN, PASS, riseAnd, span } from "./facts";
 
 const UNIT = { id: "a-1", name: "Cotter Vale Approach", kind: "air unit", leadTimeMin: 30, version: 1 };
 const VOLUME: VolumeFacts = {
@@ -11,8 +11,8 @@ const VOLUME: VolumeFacts = {
   authorityId: "a-1",
   floorText: "FL 100",
   ceilingText: "FL 245",
-  activeSpans: [{ fromMs: after(-3600), toMs: after(150) }],
-  scheduleKnownUntilMs: after(86_400),
+  activeSpans: [{ fromMs: riseAnd(-3600), toMs: riseAnd(150) }],
+  scheduleKnownUntilMs: riseAnd(86_400),
   liftable: true,
 };
 const INSIDE = { ...PASS, airspaceKey: "v-1:5", volumes: [{ volumeId: "v-1", spans: [span(100, 200)] }] };
@@ -24,7 +24,7 @@ function judged(volume: Partial<VolumeFacts>, answers: AnswerFacts[] | null = nu
 }
 
 function answer(outcome: AnswerFacts["outcome"]): AnswerFacts {
-  return { authorityId: "a-1", outcome, conditions: null, reasons: null, answeredMs: after(-5000) };
+  return { authorityId: "a-1", outcome, conditions: null, reasons: null, answeredMs: riseAnd(-5000) };
 }
 
 describe("airspace", () => {
@@ -69,7 +69,7 @@ describe("airspace", () => {
     const unknown = judged({ activeSpans: [] });
     expect(brief(unknown)).toEqual([["not checked", 100, 200]]);
     expect(unknown[0]?.overridable).toBe(true);
-    expect(brief(judged({ scheduleKnownUntilMs: after(170) }))).toEqual([
+    expect(brief(judged({ scheduleKnownUntilMs: riseAnd(170) }))).toEqual([
       ["pending", 100, 150],
       ["not checked", 170, 200],
     ]);

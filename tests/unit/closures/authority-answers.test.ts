@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { authorityAnswers } from "@/lib/planning/closures/authority-answers";
 import type { AnswerFacts, PassFacts } from "@/lib/planning/pass-facts";
-import { after, brief, MINUTE, OPEN, PASS, RISE, span } from "./facts";
+import { brief, MINUTE, OPEN, PASS, RISE, riseAnd, span } from "./facts";
 
 const DESK = { id: "desk", name: "Eastmoor Desk", kind: "clearing authority", leadTimeMin: 60, version: 1 };
 const UNIT = { id: "unit", name: "Cotter Vale Approach", kind: "air unit", leadTimeMin: 30, version: 1 };
@@ -19,7 +19,7 @@ const FACTS: PassFacts = {
       floorText: "FL 100",
       ceilingText: "FL 245",
       activeSpans: [span(-9000, 9000)],
-      scheduleKnownUntilMs: after(90_000),
+      scheduleKnownUntilMs: riseAnd(90_000),
       liftable: true,
     },
   ],
@@ -51,7 +51,7 @@ describe("authority answers", () => {
   });
 
   it("closes every second that is too near to ask the station's authority", () => {
-    const nowMs = after(120) - 60 * MINUTE;
+    const nowMs = riseAnd(120) - 60 * MINUTE;
     expect(brief(authorityAnswers(PASS, { ...FACTS, nowMs }))).toEqual([
       ["closed", 0, 120],
       ["pending", 0, 600],

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { elementSetAge } from "@/lib/planning/closures/element-set-age";
 import type { ElementFacts } from "@/lib/planning/pass-facts";
-import { after, brief, HOUR, OPEN, PASS, RISE } from "./facts";
+import { brief, HOUR, OPEN, PASS, RISE, riseAnd } from "./facts";
 
 function judged(usedEpochMs: number, amend: Partial<ElementFacts> = {}) {
   const elements = { ...OPEN.elements, usedEpochMs, newestEpochMs: usedEpochMs, ...amend };
@@ -16,14 +16,14 @@ describe("element-set age", () => {
   });
 
   it("is pending past the limit, from that second on", () => {
-    expect(brief(judged(after(120) - 72 * HOUR))).toEqual([["pending", 120.001, 600]]);
+    expect(brief(judged(riseAnd(120) - 72 * HOUR))).toEqual([["pending", 120.001, 600]]);
     expect(judged(RISE - 100 * HOUR)[0]?.cause).toBe(
       "The element set is 4.2 d old at this pass (Hollin Fell takes 3 d); some 5.2 km along the track.",
     );
   });
 
   it("reads not checked past twice the limit, open to a person's word", () => {
-    const closures = judged(after(200) - 144 * HOUR);
+    const closures = judged(riseAnd(200) - 144 * HOUR);
     expect(brief(closures)).toEqual([
       ["pending", 0, 200.001],
       ["not checked", 200.001, 600],

@@ -9,20 +9,20 @@ export const MINUTE = 60_000;
 export const HOUR = 3_600_000;
 export const DAY = 24 * HOUR;
 
-/** Seconds after rise as Unix milliseconds. */
-export function after(seconds: number): number {
+/** seconds after rise as Unix milliseconds. */
+export function riseAnd(seconds: number): number {
   return RISE + seconds * 1000;
 }
 
 /** A span in seconds after rise. */
 export function span(fromS: number, toS: number) {
-  return { fromMs: after(fromS), toMs: after(toS) };
+  return { fromMs: riseAnd(fromS), toMs: riseAnd(toS) };
 }
 
 export const PASS: PassGeometry = {
   elementSetId: "set-1",
   riseMs: RISE,
-  culminateMs: after(300),
+  culminateMs: riseAnd(300),
   setMs: SET,
   maxElevationDeg: 62,
   stationVersion: 3,

@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { firedUpon } from "@/lib/planning/closures/fired-upon";
 import { closuresOf } from "@/lib/planning/closures/list";
 import { timePassed } from "@/lib/planning/closures/time-passed";
-import { after, brief, HOUR, OPEN, PASS, RISE, span } from "./facts";
+import { brief, HOUR, OPEN, PASS, RISE, riseAnd, span } from "./facts";
 
 function firing(closedMs: number) {
   return { engagementNumber: 1003, outcome: "fired" as const, closedMs };
@@ -23,9 +23,9 @@ describe("fired upon", () => {
   });
 
   it("takes the last of several firings, and leaves what was before it alone", () => {
-    const firings = [firing(after(100)), firing(RISE - 20 * HOUR)];
+    const firings = [firing(riseAnd(100)), firing(RISE - 20 * HOUR)];
     expect(brief(firedUpon(PASS, { ...OPEN, firings }))).toEqual([["pending", 100, 600]]);
-    expect(firedUpon(PASS, { ...OPEN, firings: [firing(after(700))] })).toEqual([]);
+    expect(firedUpon(PASS, { ...OPEN, firings: [firing(riseAnd(700))] })).toEqual([]);
   });
 });
 
@@ -35,12 +35,12 @@ describe("time passed", () => {
   });
 
   it("closes what is over", () => {
-    expect(brief(timePassed(PASS, { ...OPEN, nowMs: after(90) }))).toEqual([["closed", 0, 90]]);
-    expect(brief(closuresOf(PASS, { ...OPEN, nowMs: after(9000) }))).toEqual([["closed", 0, 600]]);
+    expect(brief(timePassed(PASS, { ...OPEN, nowMs: riseAnd(90) }))).toEqual([["closed", 0, 90]]);
+    expect(brief(closuresOf(PASS, { ...OPEN, nowMs: riseAnd(9000) }))).toEqual([["closed", 0, 600]]);
   });
 
   it("closes a dwell from its own beginning", () => {
-    const facts = { ...OPEN, nowMs: after(10), dwell: span(-30, 60) };
+    const facts = { ...OPEN, nowMs: riseAnd(10), dwell: span(-30, 60) };
     expect(brief(timePassed(PASS, facts))).toEqual([["closed", -30, 10]]);
   });
 });

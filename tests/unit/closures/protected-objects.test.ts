@@ -2,13 +2,13 @@ import { describe, expect, it } from "vitest";
 import { closureLabel } from "@/lib/planning/closure";
 import { protectedObjects } from "@/lib/planning/closures/protected-objects";
 import type { ProtectedFacts, ScreeningFacts } from "@/lib/planning/pass-facts";
-import { after, brief, DAY, HOUR, OPEN, PASS, RISE, span } from "./facts";
+import { brief, DAY, HOUR, OPEN, PASS, RISE, riseAnd, span } from "./facts";
 
 const PAYLOAD: ProtectedFacts = { id: "p-1", name: "QS-88", class: "payload", version: 2 };
 const CREWED: ProtectedFacts = { id: "c-1", name: "Larkspur", class: "crewed", version: 1 };
 
 function judged(amend: Partial<ScreeningFacts>) {
-  const elements = { ...OPEN.elements, usedEpochMs: after(100) - 2 * DAY };
+  const elements = { ...OPEN.elements, usedEpochMs: riseAnd(100) - 2 * DAY };
   return protectedObjects(PASS, { ...OPEN, elements, screening: { ...OPEN.screening, ...amend } });
 }
 
@@ -19,7 +19,7 @@ function crossing(object: ProtectedFacts) {
     minSeparationDeg: 1.9,
     halfAngleDeg: 2.5,
     addedDeg: 0.2,
-    objectEpochMs: after(100) - 9 * HOUR,
+    objectEpochMs: riseAnd(100) - 9 * HOUR,
   };
 }
 

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { closuresOf } from "@/lib/planning/closures/list";
 import { visibility } from "@/lib/planning/closures/visibility";
-import { after, brief, OPEN, PASS, RISE, span } from "./facts";
+import { brief, OPEN, PASS, RISE, riseAnd, span } from "./facts";
 
 describe("visibility", () => {
   it("leaves a pass between floor and ceiling open", () => {
@@ -32,7 +32,7 @@ describe("visibility", () => {
 
   it("closes a pass that the newest element set no longer shows, and the dwell on it", () => {
     expect(brief(visibility(PASS, { ...OPEN, vanishedAtMs: RISE - 1000 }))).toEqual([["closed", 0, 600]]);
-    const facts = { ...OPEN, vanishedAtMs: RISE - 1000, dwell: { fromMs: after(-50), toMs: after(10) } };
+    const facts = { ...OPEN, vanishedAtMs: RISE - 1000, dwell: { fromMs: riseAnd(-50), toMs: riseAnd(10) } };
     expect(brief(visibility(PASS, facts))).toEqual([["closed", -50, 10]]);
   });
 });
