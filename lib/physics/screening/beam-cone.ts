@@ -1,5 +1,5 @@
 import type { SiteFrame } from "../frames/earth";
-import { makePath, type Path, PropagationFailure, pathAt, pathNode } from "../orbit/path";
+import { makePath, mustNode, type Path, PropagationFailure } from "../orbit/path";
 import type { Orbit } from "../orbit/propagate";
 import { type Cone, type ConeSample, exactCone, exactEdge, exactExtremum, sampleCone } from "./cone-edges";
 import { nearTimes } from "./near-times";
@@ -76,38 +76,40 @@ export function screenBeamMany(args: {
   if (!(fromMs < toMs)) return others.map(() => ({ ok: true, crossings: [] }));
   const chunks = Math.ceil((toMs - fromMs) / CHUNK_MS);
   const target = makePath(args.target, fromMs, toMs, 2 * chunks);
-  return others.map(({ orbit, halfAngleRad }) => {
-    const other = makePath(orbit, fromMs, toMs, 2 * chunks);
-    try {
-      return { ok: true, crossings: crossings({ station: frame.positionKm, target, other, halfAngleRad }) };
-    } catch (error) {
-      if (!(error instanceof PropagationFailure)) throw error;
-      return { ok: false, reason: error.message };
-    }
-  });
+  return others.map((other) => screenOne(frame, target, other));
 }
 
-function crossings(cone: Cone): ConeCrossing[] {
-  const near: [number, number][] = [];
-  const { target, other } = cone;
-  const targetAt = (atMs: number, out: Float64Array) => pathAt(target, atMs, out);
-  for (let i = 0; i < other.segments.length; i += 2) {
-    const mid = pathNode(other, i + 1);
-    nearTimes(
-      {
-        station: cone.station,
-        midMs: mid.atMs,
-        halfS: other.stepMs / 1000,
-        targetAt,
-        other: mid,
-        otherPeriodS: other.orbit.periodS,
-        halfAngleRad: cone.halfAngleRad,
-      },
-      near,
-    );
+function screenOne(frame: SiteFrame, target: Path, { orbit, halfAngleRad }: ScreenedObject): Screening {
+  try {
+    const near = nearTimesOf(frame, target, orbit, halfAngleRad);
+    if (near.length === 0) return { ok: true, crossings: [] };
+    const endMs = pathEnd(target);
+    const other = makePath(orbit, target.fromMs, endMs, target.segments.length);
+    const cone = { station: frame.positionKm, target, other, halfAngleRad };
+    const crossings = near.flatMap(([fromMs, toMs]) => crossingsWithin(cone, fromMs, Math.min(toMs, endMs)));
+    return { ok: true, crossings };
+  } catch (error) {
+    if (!(error instanceof PropagationFailure)) throw error;
+    return { ok: false, reason: error.message };
   }
-  const endMs = pathEnd(target);
-  return near.flatMap(([fromMs, toMs]) => crossingsWithin(cone, fromMs, Math.min(toMs, endMs)));
+}
+
+/** Near times over the whole of the target's path, by one state of the object for each two of its steps. */
+function nearTimesOf(
+  frame: SiteFrame,
+  target: Path,
+  orbit: Orbit,
+  halfAngleRad: (atMs: number) => number,
+): [number, number][] {
+  const near: [number, number][] = [];
+  for (let i = 1; i < target.segments.length; i += 2) {
+    const midMs = target.fromMs + i * target.stepMs;
+    const other = mustNode(orbit, midMs);
+    const halfS = target.stepMs / 1000;
+    const station = frame.positionKm;
+    nearTimes({ station, midMs, halfS, target, other, otherPeriodS: orbit.periodS, halfAngleRad }, near);
+  }
+  return near;
 }
 
 function pathEnd(path: Path): number {

@@ -1,5 +1,6 @@
 import { EARTH_MU_KM3_PER_S2 } from "../constants";
 import type { EarthFixedNode } from "../orbit/earth-fixed";
+import { type Path, pathAt } from "../orbit/path";
 import type { Vec3 } from "../vector";
 
 /** The half-angle may not change faster than this, rad/s: a guard of 4 s over a low pass changes by 2e-3. */
@@ -25,8 +26,7 @@ export interface Chunk {
   readonly midMs: number;
   /** Half the length of the chunk, s. */
   readonly halfS: number;
-  /** Position and velocity of the target at a time of the chunk, Earth-fixed, on its polynomial. */
-  readonly targetAt: (atMs: number, out: Float64Array) => void;
+  readonly target: Path;
   /** State of the other object in the middle of the chunk, and its period, s. */
   readonly other: EarthFixedNode;
   readonly otherPeriodS: number;
@@ -61,7 +61,7 @@ function search(chunk: Chunk, atMs: number, halfS: number, out: [number, number]
 /** An angle by which the other object surely stays outside the cone over a stretch; else not above 0. */
 function clearance(chunk: Chunk, atMs: number, halfS: number): number {
   const { station: s, other } = chunk;
-  chunk.targetAt(atMs, target);
+  pathAt(chunk.target, atMs, target);
   const tx = (target[0] as number) - s.x;
   const ty = (target[1] as number) - s.y;
   const tz = (target[2] as number) - s.z;
