@@ -7,6 +7,7 @@ import {
   passSearchInput,
 } from "./calculations";
 import { type ApiRoute, json } from "./openapi-route";
+import type { PassSkyBody } from "./pass-surroundings";
 import { type JudgementBody, judgementQuery, type PassBody, type PassSheetBody, passQuery } from "./passes";
 import { type SweepBody, sweepInput } from "./sweeps";
 
@@ -76,6 +77,14 @@ export const PASSES: readonly ApiRoute[] = [
     summary: "What booking a dwell of this pass would meet, and what it would do. Nothing is booked.",
     query: judgementQuery,
     gives: json<JudgementBody>()("The judgement.", "from", "to"),
+    refusals: [404],
+  },
+  {
+    method: "get",
+    path: "/api/passes/{id}/sky",
+    tag: "passes",
+    summary: "Sun, Moon, the light on the fragment, and the protected objects near the beam of a pass.",
+    gives: json<PassSkyBody>()("The sky.", "at", "sun", "moon", "darkness", "sunlight", "near"),
     refusals: [404],
   },
   {

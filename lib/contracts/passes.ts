@@ -80,6 +80,8 @@ export interface SampleBody {
   readonly couplingNPerW: number;
   readonly deltaVMPerS: number;
   readonly worthPerS: number;
+  /** How the Sun shines on the fragment: sunlit, penumbra or umbra; null without a state. */
+  readonly sunlight: "sunlit" | "penumbra" | "umbra" | null;
 }
 
 /** One pass in full: GET /api/passes/:id. */

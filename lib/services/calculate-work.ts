@@ -2,6 +2,7 @@ import { parseElementSets } from "@/lib/formats/element-sets";
 import { calculateCrossings } from "./calculate-crossings";
 import { calculateImpulse } from "./calculate-impulse";
 import { calculatePasses } from "./calculate-passes";
+import { calculateSky } from "./calculate-sky";
 
 /**
  * The calculations that may take long: pure functions of one plain input each, so that they can run in
@@ -11,6 +12,7 @@ export const CALCULATIONS = {
   "pass-search": calculatePasses,
   "beam-screen": calculateCrossings,
   "impulse-estimate": calculateImpulse,
+  "pass-sky": calculateSky,
   "read-element-sets": parseElementSets,
 };
 

@@ -4,6 +4,7 @@ import type { EstimateBody, PassSheetBody, SampleBody } from "@/lib/contracts/pa
 import { notFound } from "@/lib/engagement/refusal";
 import type { Actor } from "@/lib/engagement/roles";
 import type { Orbit } from "@/lib/physics/orbit/propagate";
+import { lightAt } from "@/lib/physics/sky/light-stretches";
 import { assumptionsOf } from "@/lib/planning/assumptions";
 import { effectOfDwell } from "@/lib/planning/effect";
 import type { Interval } from "@/lib/planning/interval";
@@ -100,6 +101,7 @@ function profileOf(
     couplingNPerW: sample.couplingNPerW,
     deltaVMPerS: sample.deltaVMPerS,
     worthPerS: sample.worthPerS,
+    sunlight: lightAt(orbit, sample.atMs),
   }));
   return { aim: built.profile.aim, aimUnit: built.profile.aimUnit, samples };
 }

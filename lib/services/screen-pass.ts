@@ -64,7 +64,14 @@ export function screenPass(pass: FoundPass, target: Orbit, ground: SweepGround):
  * The half-angle with the errors at the end where they are larger, and both objects as near as they come
  * in the pass: never too small, and one number for the whole pass, which keeps the screening fast.
  */
-function widestHalfAngle(pass: FoundPass, target: Orbit, object: Guarded): InflatedHalfAngle {
+export function widestHalfAngle(
+  pass: {
+    readonly event: Pick<FoundPass["event"], "riseMs" | "setMs" | "minRangeKm">;
+    readonly station: Pick<FoundPass["station"], "frame">;
+  },
+  target: Orbit,
+  object: Pick<Guarded, "epochMs" | "halfAngleDeg" | "orbit">,
+): InflatedHalfAngle {
   const { riseMs, setMs, minRangeKm } = pass.event;
   const other = {
     epochMs: object.epochMs,

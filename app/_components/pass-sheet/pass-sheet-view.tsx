@@ -5,12 +5,12 @@ import useSWR from "swr";
 import { fetchJson } from "@/app/_client/fetch-json";
 import { ErrorNote } from "@/app/_components/error-note";
 import { Section } from "@/app/_components/section";
+import { PassLight, PassSky } from "@/app/_components/sky/pass-sky";
 import type { PassSheetBody } from "@/lib/contracts/passes";
 import { ClosureList } from "./closure-list";
 import { DwellSection } from "./dwell-section";
 import { PassHead } from "./pass-head";
 import { SamplesTable } from "./samples-table";
-import { SkyChart } from "./sky-chart";
 import { spanOf } from "./use-judgement";
 
 interface PassSheetViewProps {
@@ -37,17 +37,23 @@ export function PassSheetView({ initial, mayPropose, ground }: PassSheetViewProp
       ) : null}
       <DwellSection sheet={sheet} mayPropose={mayPropose} />
       <div className="grid gap-5 xl:grid-cols-[minmax(0,1fr)_26rem]">
-        <Section title="What closes it" intro="In time order by weight: closed, not checked, pending.">
+        <Section
+          title="What closes it"
+          intro="What is closed first, then what is not checked, then what is still awaited."
+        >
           <ClosureList closures={sheet.closures} />
         </Section>
         <Section title="Sky">
-          <SkyChart sheet={sheet} dwell={spanOf(sheet.booked ?? sheet.dwell)} />
+          <PassSky sheet={sheet} dwell={spanOf(sheet.booked ?? sheet.dwell)} />
         </Section>
       </div>
-      <Section title="Ground track">{ground}</Section>
+      <div className="grid gap-5 xl:grid-cols-[minmax(0,1fr)_minmax(0,1fr)]">
+        <Section title="Ground track">{ground}</Section>
+        <PassLight sheet={sheet} />
+      </div>
       <Section
         title="Samples"
-        intro={`Every few seconds from rise to set. Worth is the gain in the aim “${sheet.aim}”.`}
+        intro={`Every few seconds from rise to set. Worth is the gain in the aim “${sheet.aim}”${sheet.aimUnit ? `, in ${sheet.aimUnit} for each second of lasing` : ""}.`}
         actions={
           <a className="link" href={`/api/passes/${sheet.id}/samples`} download>
             Download as CSV

@@ -62,5 +62,6 @@ export function sampleColumns(aimUnit: string): readonly SampleColumn[] {
       text: (s) => significantText(s.worthPerS),
       value: (s) => s.worthPerS,
     },
+    { head: "Sunlight", csv: "sunlight", text: (s) => s.sunlight ?? "", value: (s) => s.sunlight ?? "" },
   ];
 }

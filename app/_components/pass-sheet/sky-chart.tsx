@@ -1,36 +1,27 @@
+import type { ReactNode } from "react";
+import {
+  SKY_CENTRE as CENTRE,
+  skyPath as pathOf,
+  skyPlace as placeOf,
+  SKY_RADIUS as RADIUS,
+  SKY_SIZE as SIZE,
+} from "@/app/_components/sky/place";
 import { utcTimeOfDay } from "@/app/_format/utc";
 import type { PassSheetBody, SampleBody } from "@/lib/contracts/passes";
-import type { Span } from "./use-judgement";
-
-const SIZE = 320;
-const CENTRE = SIZE / 2;
-const RADIUS = 132;
-
-interface Point {
-  readonly x: number;
-  readonly y: number;
-}
-
-/** Zenith in the middle, horizon at the rim, north up, east to the right as on a map. */
-function placeOf(azimuthDeg: number, elevationDeg: number): Point {
-  const r = (RADIUS * (90 - elevationDeg)) / 90;
-  const a = (azimuthDeg * Math.PI) / 180;
-  return { x: CENTRE + r * Math.sin(a), y: CENTRE - r * Math.cos(a) };
-}
-
-const pathOf = (samples: readonly SampleBody[]): string =>
-  samples
-    .map((s, i) => {
-      const p = placeOf(s.azimuthDeg, s.elevationDeg);
-      return `${i ? "L" : "M"}${p.x.toFixed(1)} ${p.y.toFixed(1)}`;
-    })
-    .join(" ");
+import type { Span } from "./dwell-time";
 
 const within = (samples: readonly SampleBody[], span: Span): SampleBody[] =>
   samples.filter((s) => Date.parse(s.at) >= span.fromMs && Date.parse(s.at) <= span.toMs);
 
+interface SkyChartProps {
+  readonly sheet: PassSheetBody;
+  readonly dwell: Span | null;
+  /** What else stands in the sky, placed by skyPlace; under the pass. */
+  readonly overlay?: ReactNode;
+}
+
 /** The pass over the station's sky, with the dwell and the stretches that protected objects close. */
-export function SkyChart({ sheet, dwell }: { readonly sheet: PassSheetBody; readonly dwell: Span | null }) {
+export function SkyChart({ sheet, dwell, overlay }: SkyChartProps) {
   const { samples, station } = sheet;
   const first = samples[0];
   const last = samples.at(-1);
@@ -45,6 +36,7 @@ export function SkyChart({ sheet, dwell }: { readonly sheet: PassSheetBody; read
         className="h-auto w-full max-w-96"
       >
         <Grid floorDeg={station.minElevationDeg} ceilingDeg={station.maxElevationDeg} />
+        {overlay}
         <path d={pathOf(samples)} fill="none" stroke="var(--ink)" strokeWidth={1.8} strokeLinejoin="round" />
         {sheet.crossings.map((c) => (
           <path
@@ -67,8 +59,8 @@ export function SkyChart({ sheet, dwell }: { readonly sheet: PassSheetBody; read
       </svg>
       <figcaption className="text-[0.8125rem] text-quiet">
         The station's sky from below the zenith, north up, east right. Thick: the dwell. Broken: where a
-        protected object closes the beam. Dashed circles: elevation floor {station.minElevationDeg}° and
-        ceiling {station.maxElevationDeg}°.
+        protected object closes the beam. Dotted: protected objects near the beam, ringed where nearest.
+        Dashed circles: elevation floor {station.minElevationDeg}° and ceiling {station.maxElevationDeg}°.
       </figcaption>
     </figure>
   );
