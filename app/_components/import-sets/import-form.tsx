@@ -9,8 +9,9 @@ import { Field } from "@/app/_components/field";
 import { Section } from "@/app/_components/section";
 import { SweepProgress } from "@/app/_components/sweep/sweep-progress";
 import type { ImportReportBody } from "@/lib/contracts/element-sets";
+import { rejectedLines } from "./rejected-lines";
 import { ImportReport } from "./report";
-import { type ImportKind, KINDS, rejectedLines, sendSets } from "./send-sets";
+import { type ImportKind, KINDS, sendSets } from "./send-sets";
 
 const MOST_BYTES = 10 * 1024 * 1024;
 
@@ -63,7 +64,7 @@ export function ImportForm() {
             {(control) => (
               <textarea
                 {...control}
-                className={`${control.className} figures min-h-44 text-[0.8125rem]`}
+                className={`${control.className} figures min-h-36 text-[0.8125rem]`}
                 spellCheck={false}
                 wrap="off"
                 value={text}
@@ -149,7 +150,7 @@ function DropBox(props: { readonly onFile: (file: File | undefined) => void; rea
       </span>
       <input
         type="file"
-        className="max-w-full text-[0.875rem]"
+        className="max-w-full text-[0.875rem] file:mr-3 file:min-h-9 file:rounded file:border file:border-ink file:bg-sheet file:px-3 file:font-semibold file:text-ink"
         accept=".tle,.txt,.json,.xml,.csv,.kvn,.omm"
         onChange={(e) => props.onFile(e.target.files?.[0])}
       />

@@ -50,11 +50,3 @@ function isReport(body: unknown): body is ImportReportBody {
   const report = body as Partial<ImportReportBody> | null;
   return typeof report?.accepted === "number" && Array.isArray(report.rejected);
 }
-
-/** The refused lines with their reasons, to be mended and tried again. */
-export function rejectedLines(report: ImportReportBody, text: string): string {
-  const lines = text.split(/\r\n|\n|\r/);
-  return report.rejected
-    .map((r) => `# line ${r.line}, column ${r.column}: ${r.message}\n${lines[r.line - 1] ?? ""}`)
-    .join("\n");
-}

@@ -7,8 +7,8 @@ import { Caution } from "@/app/_components/caution";
 import { ErrorNote } from "@/app/_components/error-note";
 import { Section } from "@/app/_components/section";
 import { StateMark } from "@/app/_components/state-mark";
-import { type EngagementState, STATES } from "@/lib/contracts/common";
 import type { PassSheetBody } from "@/lib/contracts/passes";
+import { type EngagementState, STATES } from "@/lib/engagement/states";
 import { DwellEditor } from "./dwell-editor";
 import { DwellStrip } from "./dwell-strip";
 import type { Span } from "./dwell-time";
@@ -37,7 +37,7 @@ export function DwellSection({
   const shown = edited === null ? first.judgement : judgement;
   const refusals = edited === null ? [] : (judgement?.refusals ?? []);
   return (
-    <Section title={titleOf(booked, dwell, edited)} intro={booked ? undefined : introOf(sheet)}>
+    <Section title={titleOf(booked, dwell, edited)} intro={booked ? undefined : introOf(sheet, edited)}>
       <div className={working ? "opacity-50" : ""} aria-busy={working}>
         {estimate ? <EffectFigures estimate={estimate} /> : null}
       </div>
@@ -103,7 +103,9 @@ function titleOf(booked: boolean, dwell: Span | null, edited: Span | null): stri
   return edited === null ? "The best dwell" : "Your dwell";
 }
 
-function introOf(sheet: PassSheetBody): string {
+function introOf(sheet: PassSheetBody, edited: Span | null): string {
+  if (edited !== null)
+    return "As you set it. The rules and the effect are worked out anew after each change.";
   if (sheet.dwell === null) return sheet.noDwellReason ?? "No stretch of this pass can be lased.";
   return "The open stretch that gains most in the aim, after acquisition and inside every limit of the station.";
 }

@@ -7,6 +7,7 @@ import { sendJson } from "@/app/_client/fetch-json";
 import { Button } from "@/app/_components/button";
 import { Dialog } from "@/app/_components/dialog";
 import { ErrorNote } from "@/app/_components/error-note";
+import { minutesText } from "@/app/_components/start/until-text";
 import { UtcTime } from "@/app/_components/utc-time";
 import { durationText } from "@/app/_format/figures";
 import type { EngagementBody } from "@/lib/contracts/engagements";
@@ -53,8 +54,8 @@ export function ProposeDialog({ open, onClose, sheet, dwell, judgement }: Propos
       <ul className="mt-1 grid gap-2">
         {judgement.concerned.map((c) => (
           <li key={c.authorityId}>
-            <span className="font-semibold">{c.name}</span> ({c.kind}): {c.because} The request must reach it{" "}
-            {durationText(c.leadTimeMin * 60)} before the dwell, by{" "}
+            <span className="font-semibold">{c.name}</span> ({c.kind}): {c.because.replace(/\.?$/, ".")} The
+            request must reach it {minutesText(c.leadTimeMin)} before the dwell, by{" "}
             <UtcTime at={dwell.fromMs - c.leadTimeMin * 60_000} show="short" />.
           </li>
         ))}

@@ -15,12 +15,14 @@ export function NextEngagements(props: {
       {props.engagements.map((e) => (
         <li
           key={e.id}
-          className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1 border-b border-line py-2 last:border-0"
+          className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1 border-b md:grid md:grid-cols-[5rem_7rem_minmax(0,1fr)_15rem_8rem] border-line py-2 last:border-0"
         >
           <Link prefetch={false} href={`/engagements/${e.id}`} className="link font-bold text-ink">
             E-{e.number}
           </Link>
-          <StateMark state={e.state} />
+          <span>
+            <StateMark state={e.state} />
+          </span>
           <span>
             {e.fragmentName} over {e.stationName}
           </span>

@@ -20,11 +20,11 @@ export function NextPass({ pass, mayPropose }: { readonly pass: PassBody; readon
         </Link>{" "}
         rises over {pass.stationName} at <UtcTime at={pass.riseAt} />. Its best dwell, {durationText(seconds)}{" "}
         from <UtcTime at={dwell.from} show="time" />, would change the perigee by{" "}
-        <strong className="figures">{heightText(-dwell.perigeeDropM)}</strong> (most likely; between{" "}
-        {heightText(-most)} and {heightText(-least)} in eight cases of ten) and the semi-major axis by{" "}
+        <strong className="figures">{heightText(-dwell.perigeeDropM)}</strong> (median; in eight cases of ten
+        between {heightText(-most)} and {heightText(-least)}) and the semi-major axis by{" "}
         <strong className="figures">{heightText(-dwell.semiMajorAxisDropM)}</strong>.
       </p>
-      <div className="my-5">
+      <div className="sheet my-5 w-fit max-w-full p-3">
         <StripOfPass pass={pass} size="medium" />
       </div>
       <div className="flex flex-wrap gap-3">

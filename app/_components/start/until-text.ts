@@ -2,11 +2,12 @@
 export function untilText(leftMs: number): string {
   const minutes = Math.round(Math.abs(leftMs) / 60_000);
   if (minutes === 0) return "now";
-  const words = lengthText(minutes);
+  const words = minutesText(minutes);
   return leftMs > 0 ? `in ${words}` : `${words} ago`;
 }
 
-function lengthText(minutes: number): string {
+/** Whole minutes as `42 min`, `3 h 05 min` or `2 d 4 h`. */
+export function minutesText(minutes: number): string {
   if (minutes < 60) return `${minutes} min`;
   const hours = Math.floor(minutes / 60);
   if (hours < 48) return `${hours} h ${String(minutes % 60).padStart(2, "0")} min`;

@@ -16,7 +16,9 @@ export function waitingLines(
   const proposed = count("proposed");
   const cleared = count("cleared");
   const lines: (WaitingLine | null)[] = [
-    line(overdue, "firing record is missing", "firing records are missing", "confirmed"),
+    line(overdue, "firing record is missing", "firing records are missing", "confirmed", {
+      when: "past",
+    }),
     line(cleared, "engagement is cleared and waits", "engagements are cleared and wait", "cleared", {
       rest: " for two people to confirm",
     }),
@@ -38,8 +40,9 @@ function line(
   one: string,
   many: string,
   state: string,
-  words: { readonly rest: string } = { rest: "" },
+  more: { readonly rest?: string; readonly when?: string } = {},
 ): WaitingLine | null {
   if (n === 0) return null;
-  return { text: `${n} ${n === 1 ? one : many}${words.rest}.`, href: `/engagements?state=${state}` };
+  const query = new URLSearchParams(more.when ? { state, when: more.when } : { state });
+  return { text: `${n} ${n === 1 ? one : many}${more.rest ?? ""}.`, href: `/engagements?${query}` };
 }
