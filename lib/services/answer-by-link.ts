@@ -84,9 +84,10 @@ function pageBody(view: NoticeView, nowMs: number): AnswerPageBody {
 }
 
 function closedReason(view: NoticeView, nowMs: number): string | null {
-  const [reason] = noticeReasons(view.notice);
-  if (reason !== undefined) return reason.message;
   const state = asState(view.engagementState);
+  const [reason] = noticeReasons(view.notice);
+  // What has ended is not answered by a later notice either.
   if (!isLive(state)) return `The engagement is ${state}: there is nothing left to answer.`;
+  if (reason !== undefined) return reason.message;
   return nowMs >= view.dwellFrom.getTime() ? "The dwell has begun or is over." : null;
 }

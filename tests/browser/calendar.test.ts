@@ -76,6 +76,36 @@ describe("the calendar", () => {
   );
 
   test(
+    "a drag out of the pass is refused in words, and the entry goes back",
+    async () => {
+      const booked = await book(planner, await bookablePass(planner));
+      const page = await desk.open(planner);
+      const hour = booked.from.slice(0, 13);
+      await page.goto(`/calendar?show=day&zoom=1&at=${hour}:00Z&station=${booked.stationId}`);
+      const entry = page.getByRole("button", { name: new RegExp(`^E-${booked.number}, proposed`) });
+      await entry.scrollIntoViewIfNeeded();
+      const before = await entry.boundingBox();
+      if (!before) throw new Error("the engagement is not drawn");
+      const [x, y] = [before.x + 20, before.y + 6];
+      // A minute is 20 px: half an hour later or earlier lies outside any pass.
+      const by = Number(booked.from.slice(14, 16)) < 30 ? 300 : -300;
+      await page.mouse.move(x, y);
+      await page.mouse.down();
+      await page.mouse.move(x, y + by / 2, { steps: 6 });
+      await page.mouse.move(x, y + by, { steps: 6 });
+      await page.mouse.up();
+      await page.getByText(`E-${booked.number} stays where it was.`).waitFor();
+      await expect
+        .poll(async () => (await entry.boundingBox())?.y, { timeout: 10_000 })
+        .toBeCloseTo(before.y, -1);
+      const still = await askApi<EngagementSheetBody>(planner, `/api/engagements/${booked.id}`);
+      expect([still.from, still.to, still.version]).toEqual([booked.from, booked.to, booked.version]);
+      await page.context().close();
+    },
+    LONG_MS,
+  );
+
+  test(
     "the zoom shows 6 h and 1 h of a day, and a narrow screen opens on the day",
     async () => {
       const page = await desk.open(demoPerson("operator"), { width: 390 });

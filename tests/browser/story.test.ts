@@ -89,7 +89,7 @@ describe("from an import to a confirmed engagement", () => {
       expect(question).toMatch(/azimuth/i);
       const beforehand = await askApi<EngagementSheetBody>(planner, `/api/engagements/${engagementId}`);
       expect(beforehand.notices.map((n) => n.answer)).toEqual([null]);
-      await page.getByLabel(/^no objection The dwell/).check();
+      await page.getByRole("radio", { name: /^no objection The dwell/ }).check();
       await page.getByRole("button", { name: "Send this answer" }).click();
       await page.getByText("Give your name.").first().waitFor();
       await page.getByLabel("Your name").fill("Duty officer Rane");

@@ -76,7 +76,7 @@ export function AnswerForm<T>({ path, asksName, given, onAnswered }: AnswerFormP
               onChange={() => setOutcome(o)}
             />
             <span>
-              <span className="font-semibold first-letter:uppercase">{o}</span>
+              <span className="font-semibold first-letter:uppercase">{o}</span>{" "}
               <span className="block text-[0.875rem] text-quiet">{EXPLAINED[o]}</span>
             </span>
           </label>

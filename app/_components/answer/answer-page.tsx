@@ -62,7 +62,7 @@ function Question({ body }: { readonly body: AnswerPageBody }) {
         {asking(body)} E-{body.engagementNumber}
       </h1>
       <p className="mt-2">{sentenceOf(body)}</p>
-      <dl className="mt-4 grid gap-x-4 gap-y-2 sm:grid-cols-[7rem_1fr]">
+      <dl className="mt-4 grid grid-cols-[5.5rem_1fr] gap-x-4 gap-y-2">
         <dt className="text-quiet">From</dt>
         <dd className="figures">
           <UtcTime at={body.dwellFrom} zone={zone} />
