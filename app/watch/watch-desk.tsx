@@ -7,9 +7,9 @@ import { fetchJson } from "@/app/_client/fetch-json";
 import { Button, ButtonLink } from "@/app/_components/button";
 import { EmptyState } from "@/app/_components/empty-state";
 import { ScrubDialog } from "@/app/_components/engagement/scrub-dialog";
+import { useNow } from "@/app/_components/engagement/use-now";
 import { ErrorNote } from "@/app/_components/error-note";
 import type { EngagementBody } from "@/lib/contracts/engagements";
-import { useNow } from "./countdown";
 import { WatchCard } from "./watch-card";
 
 const LIVE = "proposed,cleared,confirmed";

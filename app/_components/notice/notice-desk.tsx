@@ -5,6 +5,7 @@ import { announce } from "@/app/_client/announce";
 import { fetchJson } from "@/app/_client/fetch-json";
 import { Button } from "@/app/_components/button";
 import { EmptyState } from "@/app/_components/empty-state";
+import { useNow } from "@/app/_components/engagement/use-now";
 import { ErrorNote } from "@/app/_components/error-note";
 import { Section } from "@/app/_components/section";
 import type { NoticeBody } from "@/lib/contracts/engagements";
@@ -22,7 +23,8 @@ interface NoticeDeskProps {
 const OTHERS_SHOWN = 30;
 
 /** Notices in the order of work: what waits, what is answered, the rest. */
-export function NoticeDesk({ nowMs, initial, mayAnswer }: NoticeDeskProps) {
+export function NoticeDesk({ nowMs: serverNowMs, initial, mayAnswer }: NoticeDeskProps) {
+  const nowMs = useNow(serverNowMs, 20_000);
   const { data, error, mutate } = useSWR<{ notices: readonly NoticeBody[] }>("/api/notices", fetchJson, {
     fallbackData: { notices: initial },
     refreshInterval: 30_000,
