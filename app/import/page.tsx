@@ -9,8 +9,8 @@ export default async function ImportPage() {
   return (
     <>
       <PageHeader title="Import">
-        Good sets are stored with their raw text and swept at once; bad ones are named by line and nothing
-        else is kept of them.
+        Good sets are stored with their raw text, and their passes are worked out at once. Bad ones are named
+        by line and column; nothing of them is kept.
       </PageHeader>
       <ImportForm />
     </>

@@ -53,9 +53,9 @@ export function ImportForm() {
     setReport(null);
   };
   return (
-    <div className="grid gap-5">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
       <Section title="Element sets" intro="TLE with or without name lines, or OMM as JSON, KVN, XML or CSV.">
-        <div className="grid gap-4">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-4">
           <DropBox onFile={(file) => void take(file)} source={source} />
           <Field
             label="Or paste them here"
@@ -72,7 +72,10 @@ export function ImportForm() {
               />
             )}
           </Field>
-          <Field label="They are" hint="Crewed spacecraft close the beam without override">
+          <Field
+            label="They are"
+            hint="Protected objects close the beam where they come near it; crewed spacecraft without exception"
+          >
             {(control) => (
               <select
                 {...control}

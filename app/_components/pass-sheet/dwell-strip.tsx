@@ -48,9 +48,10 @@ export function DwellStrip({ sheet, dwell, onChange }: DwellStripProps) {
         </span>
       </div>
       <p className="mt-2 max-w-[90ch] text-[0.8125rem] text-quiet">
-        Arch: elevation. Amber: seconds in which lasing lowers the orbit, the higher the more. Pale, under the
-        line: seconds in which it would raise it. Hatched: closed or not checked. Dots on top: an answer or a
-        fresher element set is awaited. Bar: the dwell{onChange ? "; drag it or its ends" : ""}.
+        Arch: elevation. Area over the line: seconds in which lasing lowers the orbit, the higher the more.
+        Area under the line: seconds in which it would raise it. Hatched: closed or not checked. Dots on top:
+        an answer or a fresher element set is awaited.
+        {dwell ? ` Bar: the dwell${onChange ? "; drag it or its ends" : ""}.` : ""}
       </p>
     </div>
   );
