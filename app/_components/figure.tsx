@@ -23,7 +23,9 @@ export function Figure({ value, unit, label, note, size = "large" }: FigureProps
         className={`figures font-semibold ${size === "large" ? "text-[1.375rem] leading-tight" : "text-base"}`}
       >
         {value}
-        {unit ? <span className="text-[0.72em] font-medium">{`\u202f${unit}`}</span> : null}
+        {unit ? (
+          <span className="text-[0.72em] font-medium">{unit === "°" ? unit : `\u202f${unit}`}</span>
+        ) : null}
       </dd>
     </div>
   );

@@ -16,25 +16,18 @@ interface HeaderProps {
 /** Mark, clock, theme and who is signed in; below, the pages this person may open. */
 export function Header({ person, theme, nowMs }: HeaderProps) {
   const items = person ? navFor(person).map(({ href, label }) => ({ href, label })) : [];
-  const tools = (
-    <>
-      <ThemeSwitch initial={theme} />
-      {person ? <Identity person={person} /> : null}
-    </>
-  );
   return (
-    <header className="border-b border-line">
-      <div className="flex flex-wrap items-center gap-x-7 gap-y-1 px-4 pt-3 sm:px-7">
-        <Link prefetch={false} href="/" className="text-[1.3125rem] font-[760] tracking-tight">
-          Dwellbook
-        </Link>
-        <div className="ml-auto flex items-center gap-7">
-          {/* Where there is room the tools stand here, else at the end of the menu. */}
-          <div className="flex items-center gap-7 max-lg:hidden">{tools}</div>
-          <Clock nowMs={nowMs} />
-        </div>
+    <header className="head">
+      <Link prefetch={false} href="/" className="head-mark text-[1.3125rem] font-[760] tracking-tight">
+        Dwellbook
+      </Link>
+      <div className="head-clock">
+        <Clock nowMs={nowMs} />
       </div>
-      <NavPanel items={items}>{tools}</NavPanel>
+      <NavPanel items={items}>
+        <ThemeSwitch initial={theme} />
+        {person ? <Identity person={person} /> : null}
+      </NavPanel>
     </header>
   );
 }

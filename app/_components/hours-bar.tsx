@@ -1,3 +1,5 @@
+import { useId } from "react";
+
 const DAY_MIN = 1440;
 
 interface HoursBarProps {
@@ -9,6 +11,7 @@ interface HoursBarProps {
 
 /** A day in UTC as a bar: open stretches solid, the rest hatched, a mark at now. The words stand beside it. */
 export function HoursBar({ hours, nowMs }: HoursBarProps) {
+  const hatch = useId();
   const nowMin = (nowMs % 86_400_000) / 60_000;
   return (
     <svg
@@ -18,17 +21,11 @@ export function HoursBar({ hours, nowMs }: HoursBarProps) {
       aria-label={hoursText(hours)}
     >
       <defs>
-        <pattern
-          id="shut-hours"
-          width="6"
-          height="6"
-          patternUnits="userSpaceOnUse"
-          patternTransform="rotate(55)"
-        >
+        <pattern id={hatch} width="6" height="6" patternUnits="userSpaceOnUse" patternTransform="rotate(55)">
           <line x1="0" y1="0" x2="0" y2="6" stroke="var(--shut)" strokeWidth="2.4" />
         </pattern>
       </defs>
-      <rect x="0.5" y="3.5" width="287" height="11" fill="url(#shut-hours)" stroke="var(--line)" />
+      <rect x="0.5" y="3.5" width="287" height="11" fill={`url(#${hatch})`} stroke="var(--line)" />
       {hours.flatMap(pieces).map(({ fromMin, toMin }) => (
         <rect
           key={fromMin}

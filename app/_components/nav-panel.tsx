@@ -6,11 +6,11 @@ import { type ReactNode, useEffect, useState } from "react";
 
 interface NavPanelProps {
   readonly items: readonly { readonly href: string; readonly label: string }[];
-  /** Theme switch and sign-out, for narrow screens. */
+  /** Theme switch and sign-out. */
   readonly children: ReactNode;
 }
 
-/** The navigation: in a row where there is room, behind a Menu button with the tools below 1024 px. */
+/** Pages and tools: in the head where there is room, behind a Menu button below 1024 px (styles/header.css). */
 export function NavPanel({ items, children }: NavPanelProps) {
   const path = usePathname();
   const [open, setOpen] = useState(false);
@@ -18,24 +18,21 @@ export function NavPanel({ items, children }: NavPanelProps) {
   useEffect(() => setOpen(false), [path]);
 
   return (
-    <div className="px-4 pb-2 sm:px-7 lg:pb-0">
+    <>
       {items.length > 0 ? (
         <button
           type="button"
           aria-expanded={open}
           aria-controls="nav-panel"
           onClick={() => setOpen(!open)}
-          className="mt-1 min-h-9 w-full rounded border border-quiet px-3 text-left font-semibold lg:hidden"
+          className="head-menu mt-1 min-h-9 rounded border border-quiet px-3 text-left font-semibold"
         >
           {open ? "Close menu" : `Menu: ${items.find((i) => isHere(path, i.href))?.label ?? "choose a page"}`}
         </button>
       ) : null}
-      <div
-        id="nav-panel"
-        className={`${open || items.length === 0 ? "flex" : "hidden"} flex-col gap-4 py-3 lg:flex lg:py-0`}
-      >
+      <div id="nav-panel" className="head-panel" data-open={open || items.length === 0}>
         {items.length > 0 ? (
-          <nav aria-label="Pages">
+          <nav aria-label="Pages" className="head-pages">
             <ul className="grid grid-cols-2 gap-x-6 sm:grid-cols-3 lg:flex lg:flex-wrap lg:gap-x-5">
               {items.map((item) => (
                 <li key={item.href}>
@@ -52,9 +49,9 @@ export function NavPanel({ items, children }: NavPanelProps) {
             </ul>
           </nav>
         ) : null}
-        <div className="flex flex-wrap items-center gap-x-6 gap-y-3 lg:hidden">{children}</div>
+        <div className="head-tools">{children}</div>
       </div>
-    </div>
+    </>
   );
 }
 

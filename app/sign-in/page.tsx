@@ -30,7 +30,7 @@ export default async function SignInPage({ searchParams }: SignInPageProps) {
         </p>
         <PassSketch />
       </div>
-      <div className="sheet self-start p-5">
+      <div className="sheet self-start p-5 max-lg:order-first">
         <h2 className="mb-4 text-xl font-bold">Sign in</h2>
         {after === "password" || after === "sessions" ? <p className="mb-4">{ENDED[after]}</p> : null}
         <SignInForm returnTo={returnTo} />
