@@ -7,11 +7,16 @@ import { HeightChange } from "./change-cell";
 import { NoDwell, PassState } from "./columns";
 
 /** Passes as blocks for narrow screens: name and state, when, the strip, the two changes side by side. */
-export function PassBlocks(props: { readonly passes: readonly PassBody[]; readonly className?: string }) {
+export function PassBlocks(props: {
+  readonly passes: readonly PassBody[];
+  /** Inside another sheet they have no edge of their own. */
+  readonly bare: boolean;
+  readonly className: string;
+}) {
   return (
-    <ul className={`sheet ${props.className ?? ""}`}>
+    <ul className={`${props.bare ? "" : "sheet px-4"} ${props.className}`}>
       {props.passes.map((p) => (
-        <li key={p.id} className="border-b border-line px-4 py-3 last:border-0">
+        <li key={p.id} className="border-b border-line py-3 last:border-0">
           <div className="flex flex-wrap items-center justify-between gap-2">
             <span>
               <Link prefetch={false} href={`/passes/${p.id}`} className="link font-bold text-ink">
@@ -30,7 +35,7 @@ export function PassBlocks(props: { readonly passes: readonly PassBody[]; readon
             <StripOfPass pass={p} size="medium" />
           </div>
           {p.dwell ? (
-            <dl className="mt-1 grid grid-cols-2 gap-x-4">
+            <dl className="mt-1 flex flex-wrap gap-x-6 gap-y-1">
               <Change
                 label="Semi-major axis"
                 dropM={p.dwell.semiMajorAxisDropM}

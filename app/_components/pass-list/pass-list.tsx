@@ -87,7 +87,7 @@ export function PassList({ nowMs, fragmentId, stations, fragments }: PassListPro
               keyOf={(p) => p.id}
             />
           </div>
-          <PassBlocks passes={rows.slice(0, shown)} className="md:hidden" />
+          <PassBlocks passes={rows.slice(0, shown)} bare={fragmentId !== undefined} className="md:hidden" />
         </div>
       ) : null}
       {rows.length > shown ? (
