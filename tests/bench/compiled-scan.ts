@@ -20,7 +20,7 @@ export function scanCompiled(
   toMs: number,
 ): Found[][] {
   const count = Math.floor((toMs - fromMs) / STEP_MS) + 1;
-  const { positionsKm } = bulk.propagate([orbit.elements], { fromMs, stepMs: STEP_MS, count });
+  const { positionsKm, usable } = bulk.propagate([orbit.elements], { fromMs, stepMs: STEP_MS, count });
   const { cosines, sines } = siderealAngles(fromMs, STEP_MS, count);
   return stations.map((station) => {
     const { positionKm: p, up } = makeSiteFrame(station.site);
@@ -37,7 +37,8 @@ export function scanCompiled(
       const dx = c * x + s * y - p.x;
       const dy = c * y - s * x - p.y;
       const dz = (positionsKm[3 * i + 2] as number) - p.z;
-      const above = dx * up.x + dy * up.y + dz * up.z > sinLimit * Math.sqrt(dx * dx + dy * dy + dz * dz);
+      const high = dx * up.x + dy * up.y + dz * up.z;
+      const above = usable[i] === 1 && high > sinLimit * Math.sqrt(dx * dx + dy * dy + dz * dz);
       const atMs = fromMs + i * STEP_MS;
       if (above && !before) riseMs = i === 0 ? fromMs : halve(exact, station, atMs - STEP_MS, atMs, true);
       if (!above && before && riseMs !== null) {

@@ -30,25 +30,33 @@ export async function benchPasses(population: Population): Promise<Row[]> {
   const ours: Stopwatch = { cpuS: 0 };
   const scan: Stopwatch = { cpuS: 0 };
   const compiled: Stopwatch = { cpuS: 0 };
-  const tally: Tally = { passes: 0, short: 0, disagreements: 0 };
+  const tallies: [Tally, Tally] = [blankTally(), blankTally()];
   // The first turn only warms the compiler up.
   for (let start = -TURN; start < orbits.length; start += TURN) {
     const turn = start < 0 ? orbits.slice(0, TURN) : orbits.slice(start, start + TURN);
-    if (start < 0) takeTurn(turn, fromMs, bulk, { cpuS: 0 }, { cpuS: 0 }, { cpuS: 0 }, null);
-    else takeTurn(turn, fromMs, bulk, ours, scan, compiled, tally);
+    if (start < 0)
+      takeTurn(turn, fromMs, bulk, { cpuS: 0 }, { cpuS: 0 }, { cpuS: 0 }, [blankTally(), blankTally()]);
+    else takeTurn(turn, fromMs, bulk, ours, scan, compiled, tallies);
   }
-  const agree = tally.disagreements === 0;
   const size = `${orbits.length} ${what}, ${STATIONS.length} stations, ${DAYS} days`;
-  const events = `${tally.passes} passes compared, ${tally.disagreements} disagreements, ${tally.short} too short for a scan`;
-  const row = (name: string, theirs: Stopwatch, goal: number): Row => ({
+  const row = (name: string, theirs: Stopwatch, goal: number, tally: Tally): Row => ({
     name,
     ours: seconds(ours.cpuS),
     theirs: seconds(theirs.cpuS),
-    ratio: agree ? theirs.cpuS / ours.cpuS : null,
+    ratio: tally.disagreements === 0 ? theirs.cpuS / ours.cpuS : null,
     goal,
-    note: `${size}; ${events}`,
+    note:
+      `${size}; ${tally.passes} passes compared, ${tally.disagreements} disagreements, ` +
+      `${tally.short} too short for a scan`,
   });
-  return [row("passSearchVsFixedScan", scan, 15), row("passSearchVsCompiledScan", compiled, 5)];
+  return [
+    row("passSearchVsFixedScan", scan, 15, tallies[0]),
+    row("passSearchVsCompiledScan", compiled, 5, tallies[1]),
+  ];
+}
+
+function blankTally(): Tally {
+  return { passes: 0, short: 0, disagreements: 0 };
 }
 
 function takeTurn(
@@ -58,7 +66,7 @@ function takeTurn(
   ours: Stopwatch,
   scan: Stopwatch,
   compiled: Stopwatch,
-  tally: Tally | null,
+  tallies: readonly [Tally, Tally],
 ): void {
   const toMs = fromMs + DAYS * 86_400_000;
   const sites = STATIONS.map((s) => s.site);
@@ -67,30 +75,24 @@ function takeTurn(
   const found = timed(ours, () => orbits.map((o) => findPasses(o, STATIONS, fromMs, toMs).passes));
   const scanned = timed(scan, () => records.map((r) => scanPasses(r, sites, limitRad, fromMs, toMs)));
   const bulked = timed(compiled, () => orbits.map((o) => scanCompiled(bulk, o, STATIONS, fromMs, toMs)));
-  if (!tally) return;
   for (const [i, passes] of found.entries()) {
-    compare(passes, scanned[i] ?? [], tally);
-    compare(passes, bulked[i] ?? [], { ...tally, passes: 0, short: 0 }, tally);
+    compare(passes, scanned[i] ?? [], tallies[0]);
+    compare(passes, bulked[i] ?? [], tallies[1]);
   }
 }
 
 /** Counts passes of ours, those too short for a scan, and every pass that one side lacks. */
-function compare(
-  passes: readonly StationPass[],
-  theirs: readonly (readonly Found[])[],
-  tally: Tally,
-  disagreementsTo: Tally = tally,
-): void {
+function compare(passes: readonly StationPass[], theirs: readonly (readonly Found[])[], tally: Tally): void {
   for (const [station, found] of theirs.entries()) {
     const mine = passes.filter((p) => p.stationIndex === station).map((p) => p.pass);
     const same = (p: (typeof mine)[number], f: Found) =>
       Math.abs(p.riseMs - f.riseMs) < TOLERANCE_MS && Math.abs(p.setMs - f.setMs) < TOLERANCE_MS;
     tally.passes += mine.length;
-    for (const f of found) if (!mine.some((p) => same(p, f))) disagreementsTo.disagreements++;
+    for (const f of found) if (!mine.some((p) => same(p, f))) tally.disagreements++;
     for (const p of mine) {
       if (found.some((f) => same(p, f))) continue;
       if (p.setMs - p.riseMs < SCAN_STEP_MS) tally.short++;
-      else disagreementsTo.disagreements++;
+      else tally.disagreements++;
     }
   }
 }
