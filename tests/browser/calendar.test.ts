@@ -83,13 +83,13 @@ describe("the calendar", () => {
       const hour = booked.from.slice(0, 13);
       await page.goto(`/calendar?show=day&zoom=1&at=${hour}:00Z&station=${booked.stationId}`);
       const entry = page.getByRole("button", { name: new RegExp(`^E-${booked.number}, proposed`) });
-      await entry.scrollIntoViewIfNeeded();
+      // Hovering waits until it stands still.
+      await entry.hover({ position: { x: 20, y: 6 } });
       const before = await entry.boundingBox();
       if (!before) throw new Error("the engagement is not drawn");
       const [x, y] = [before.x + 20, before.y + 6];
-      // A minute is 20 px: half an hour later or earlier lies outside any pass.
+      // A minute is 20 px: a quarter of an hour later or earlier lies outside the pass.
       const by = Number(booked.from.slice(14, 16)) < 30 ? 300 : -300;
-      await page.mouse.move(x, y);
       await page.mouse.down();
       await page.mouse.move(x, y + by / 2, { steps: 6 });
       await page.mouse.move(x, y + by, { steps: 6 });

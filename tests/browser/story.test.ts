@@ -8,6 +8,7 @@ import {
   type Desk,
   demoPerson,
   fillChecklist,
+  IMPORTED_NUMBER,
   mailWith,
   openDesk,
 } from "./support";
@@ -35,7 +36,9 @@ describe("from an import to a confirmed engagement", () => {
     async () => {
       const page = await desk.open(planner);
       await page.goto("/import");
-      await page.getByLabel("Or paste them here").fill(`${inventedSet(98_765)}\n${brokenSet(98_766)}\n`);
+      await page
+        .getByLabel("Or paste them here")
+        .fill(`${inventedSet(IMPORTED_NUMBER)}\n${brokenSet(98_766)}\n`);
       await page.getByRole("button", { name: "Preview" }).click();
       const report = page.getByRole("region", { name: "Preview" });
       await report.getByText("1 set would be stored, 1 set refused").waitFor();
@@ -47,7 +50,7 @@ describe("from an import to a confirmed engagement", () => {
         planner,
         "/api/fragments",
       );
-      expect(fragments.map((f) => f.catalogNumber)).toContain(98_765);
+      expect(fragments.map((f) => f.catalogNumber)).toContain(IMPORTED_NUMBER);
       expect(fragments.map((f) => f.catalogNumber)).not.toContain(98_766);
       await page.context().close();
     },
@@ -134,6 +137,41 @@ describe("from an import to a confirmed engagement", () => {
       expect(await record.isDisabled()).toBe(true);
       expect(await other.locator("#why-not-fire").textContent()).toContain("The dwell has not begun");
       await other.context().close();
+    },
+    LONG_MS,
+  );
+
+  test(
+    "a firing record before the dwell is refused in words, and what was typed stays",
+    async () => {
+      const page = await desk.open(demoPerson("operator", 0));
+      // The page keeps its form shut before the dwell; here it is told otherwise, so that the server has to refuse.
+      await page.route(`**/api/engagements/${engagementId}`, async (route) => {
+        const response = await route.fetch();
+        const sheet = (await response.json()) as EngagementSheetBody;
+        const commands = sheet.commands.map((c) => ({ ...c, refusals: [] }));
+        await route.fulfill({ response, json: { ...sheet, commands } });
+      });
+      await page.goto(`/engagements/${engagementId}`);
+      await page.evaluate("window.dispatchEvent(new Event('focus'))");
+      await page.getByRole("button", { name: "Record firing" }).click();
+      await page.getByRole("button", { name: "Keep this record" }).click();
+      await page.getByText("Choose what happened.").waitFor();
+      await page.getByRole("radio", { name: /^in part/ }).check();
+      await page.getByLabel("Shutter opened").fill(`${pass.dwell.from.slice(0, 19)}.250Z`);
+      await page.getByLabel("Pulses").fill("100");
+      await page.getByRole("button", { name: "Add an interruption" }).click();
+      await page.getByLabel("Interruption 1 at").fill(pass.dwell.from.slice(0, 19));
+      await page.getByLabel("Cause").fill("aircraft");
+      await page.getByLabel("Lost (s)").fill("4");
+      await page.getByRole("button", { name: "Keep this record" }).click();
+      await page.getByText("The dwell has not begun: there is nothing to record yet.").first().waitFor();
+      const words = (await page.locator("dialog[open]").textContent()) ?? "";
+      expect(words).toContain("When did the shutter close?");
+      expect(await page.getByLabel("Pulses").inputValue()).toBe("100");
+      const sheet = await askApi<EngagementSheetBody>(planner, `/api/engagements/${engagementId}`);
+      expect([sheet.state, sheet.firing]).toEqual(["confirmed", null]);
+      await page.context().close();
     },
     LONG_MS,
   );

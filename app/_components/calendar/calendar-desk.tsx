@@ -1,7 +1,7 @@
 "use client";
 
 import dynamic from "next/dynamic";
-import { usePathname, useRouter, useSearchParams } from "next/navigation";
+import { usePathname, useSearchParams } from "next/navigation";
 import { useMemo, useState, useSyncExternalStore } from "react";
 import { announce } from "@/app/_client/announce";
 import { FetchError, sendJson } from "@/app/_client/fetch-json";
@@ -33,7 +33,6 @@ interface CalendarDeskProps {
 
 /** The calendar: engagements in front, bookable passes behind, and the dialogs to book and to move. */
 export function CalendarDesk({ nowMs, personId, mayPropose, stations, fragments }: CalendarDeskProps) {
-  const router = useRouter();
   const pathname = usePathname();
   const params = useSearchParams();
   const narrow = useNarrow();
@@ -45,7 +44,8 @@ export function CalendarDesk({ nowMs, personId, mayPropose, stations, fragments 
   const [picked, setPicked] = useState<OfferEntry | null>(null);
   const [opened, setOpened] = useState<EngagementBody | null>(null);
   const change = (next: CalendarView): void =>
-    router.replace(`${pathname}${calendarViewText(next)}`, { scroll: false });
+    // Not by the router: nothing of it needs the server, and the next click must see it at once.
+    window.history.replaceState(null, "", `${pathname}${calendarViewText(next)}`);
   const told = (words: string, link?: { href: string; label: string }): void => {
     announce(words, "news", link);
     void again();

@@ -1,6 +1,6 @@
 "use client";
 
-import { usePathname, useRouter, useSearchParams } from "next/navigation";
+import { usePathname, useSearchParams } from "next/navigation";
 import { useMemo } from "react";
 import useSWR from "swr";
 import { fetchJson } from "@/app/_client/fetch-json";
@@ -26,7 +26,6 @@ interface EngagementListProps {
 
 /** Engagements by the filters in the address bar. */
 export function EngagementList({ nowMs, stations }: EngagementListProps) {
-  const router = useRouter();
   const pathname = usePathname();
   const params = useSearchParams();
   const filters = useMemo(() => readEngagementFilters(new URLSearchParams(params)), [params]);
@@ -36,7 +35,7 @@ export function EngagementList({ nowMs, stations }: EngagementListProps) {
     { keepPreviousData: true, refreshInterval: 30_000 },
   );
   const change = (next: EngagementFilters): void =>
-    router.replace(`${pathname}${engagementFilterText(next)}`, { scroll: false });
+    window.history.replaceState(null, "", `${pathname}${engagementFilterText(next)}`);
   const rows = useMemo(() => {
     const all = [...(data?.engagements ?? [])];
     // What is past is read backwards: the latest first.
