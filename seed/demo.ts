@@ -43,13 +43,14 @@ async function fillAll(nowMs: number): Promise<void> {
   say("importing element sets of some three hundred protected objects and forty fragments");
   await importProtected(planner, inventProtected(), pastMs - HOUR_MS, pastMs);
   const past = await importFragments(planner, fragments.slice(0, PAST_FRAGMENTS), pastMs - HOUR_MS, pastMs);
-  await inTransaction((tx) => fillBodies(tx, fragments));
+  await inTransaction((tx) => fillBodies(tx, fragments.slice(0, PAST_FRAGMENTS)));
   say("sweeping passes of the last two days");
   if (past) await sweepHere(past, pastMs);
   await bookPast(pastMs, nowMs);
   say("importing today's element sets and sweeping the coming week");
   await importProtected(planner, inventProtected(), nowMs - HOUR_MS, nowMs);
   const fresh = await importFragments(planner, fragments, nowMs - HOUR_MS, nowMs);
+  await inTransaction((tx) => fillBodies(tx, fragments.slice(PAST_FRAGMENTS)));
   if (fresh) await sweepHere(fresh, nowMs);
   await bookComing(nowMs);
   say("the demo is filled");
