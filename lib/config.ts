@@ -16,6 +16,7 @@ const schema = z.object({
   DWELLBOOK_WORKER_HEARTBEAT_S: z.coerce.number().min(0.2).max(60).default(5),
   DWELLBOOK_WORKER_RELEASE_S: z.coerce.number().min(1).max(3600).default(30),
   DWELLBOOK_WORKER_POLL_MS: z.coerce.number().int().min(100).max(60_000).default(2000),
+  DWELLBOOK_CLOSE_APPROACH_KM: z.coerce.number().min(0.1).max(100).default(5),
 });
 
 export type Config = z.infer<typeof schema>;

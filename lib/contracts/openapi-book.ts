@@ -1,3 +1,4 @@
+import type { AfterDwellBody } from "./after-dwell";
 import { type AnswerPageBody, answerInput } from "./answers";
 import {
   bookInput,
@@ -66,6 +67,22 @@ export const BOOK: readonly ApiRoute[] = [
     body: confirmInput,
     gives: json<EngagementBody>()("The engagement.", "id", "state", "version"),
     refusals: [404, 422],
+  },
+  {
+    method: "get",
+    path: "/api/engagements/{id}/after-dwell",
+    tag: "book",
+    summary:
+      "Protected objects that the fragment comes near in the days after the dwell, nudged and untouched.",
+    gives: json<AfterDwellBody>()(
+      "The screening, as advice.",
+      "state",
+      "from",
+      "to",
+      "approaches",
+      "assumptions",
+    ),
+    refusals: [404],
   },
   {
     method: "post",

@@ -3,6 +3,7 @@ import { keepWeekFilledTask } from "./tasks/keep-week-filled";
 import { lapseEngagementsTask } from "./tasks/lapse-engagements";
 import { pruneWorkersTask } from "./tasks/prune-workers";
 import { rescreenEngagementTask } from "./tasks/rescreen-engagement";
+import { screenAfterDwellTask } from "./tasks/screen-after-dwell";
 import { sendNoticeTask } from "./tasks/send-notice";
 import { sweepChunkTask } from "./tasks/sweep-chunk";
 
@@ -14,4 +15,5 @@ export const TASKS: readonly Task[] = [
   sendNoticeTask,
   lapseEngagementsTask,
   rescreenEngagementTask,
+  screenAfterDwellTask,
 ];

@@ -15,6 +15,7 @@ import { type Judgement, judgeDwell } from "./judge-dwell";
 import { writeLedger } from "./ledger";
 import { type RoundMember, raiseNotices } from "./raise-notices";
 import { readBody } from "./read-input";
+import { queueAfterDwell } from "./screen-after-dwell";
 import { currentBody } from "./view-engagement";
 
 /**
@@ -70,6 +71,7 @@ async function book(tx: Transaction, booking: Booking): Promise<EngagementBody> 
     fragment: pass.fragmentName,
     notices,
   });
+  await queueAfterDwell(tx, engagement.id);
   // Where somebody is asked, only an answer can clear it.
   if (judgement.concerned.length === 0) await tryClear(tx, { station, engagement }, nowMs);
   return currentBody(tx, engagement.id, nowMs);

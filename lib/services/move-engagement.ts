@@ -21,6 +21,7 @@ import { writeLedger } from "./ledger";
 import { permit } from "./permit";
 import { type RoundMember, raiseNotices } from "./raise-notices";
 import { readBody } from "./read-input";
+import { queueAfterDwell } from "./screen-after-dwell";
 import { currentBody } from "./view-engagement";
 
 /**
@@ -80,6 +81,7 @@ async function move(tx: Transaction, args: Move): Promise<void> {
     calendarSequence: engagement.calendarSequence + 1,
   };
   const changed = await changeEngagement(tx, engagementId, changes, nowMs);
+  await queueAfterDwell(tx, engagementId);
   await tellMove(tx, args, changed, judgement, { answersVoided: voided.length, confirmationsVoided: names });
 }
 

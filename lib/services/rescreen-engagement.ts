@@ -13,6 +13,7 @@ import type { Judgement } from "./judge-dwell";
 import { SYSTEM, writeLedger } from "./ledger";
 import { revisedRound } from "./move-engagement";
 import { type RoundMember, raiseNotices } from "./raise-notices";
+import { queueAfterDwell } from "./screen-after-dwell";
 import { sendBack } from "./send-back";
 
 /**
@@ -52,6 +53,7 @@ async function keepNewest(
     { elementSetId, laserSettingId, effect: storedEffect(effect, engagement.effect.aim) },
     nowMs,
   );
+  await queueAfterDwell(tx, engagement.id);
   await writeLedger(tx, SYSTEM, {
     action: "judged engagement again on newer figures",
     subjectKind: "engagement",

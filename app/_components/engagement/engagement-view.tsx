@@ -3,6 +3,7 @@
 import Link from "next/link";
 import useSWR from "swr";
 import { fetchJson } from "@/app/_client/fetch-json";
+import { AfterDwell } from "@/app/_components/after-dwell/after-dwell";
 import { Caution } from "@/app/_components/caution";
 import { ErrorNote } from "@/app/_components/error-note";
 import { ClosureList } from "@/app/_components/pass-sheet/closure-list";
@@ -82,6 +83,7 @@ export function EngagementView({ initial }: EngagementViewProps) {
         ) : null}
         <Caution />
       </Section>
+      <AfterDwell engagementId={sheet.id} />
       <Section title="Notices and answers">
         <NoticeList notices={sheet.notices} />
       </Section>
