@@ -10,6 +10,9 @@ import { actorOf } from "./fill-people";
 
 const MINUTE_MS = 60_000;
 
+/** So that the demo shows every station at work, not the best one alone. */
+const MOST_AT_STATION = 2;
+
 /** The invented people who act in the demo's story. */
 export interface Cast {
   readonly planner: Actor;
@@ -55,7 +58,8 @@ export async function choosePasses(
   const chosen: PassBody[] = [];
   for (const pass of worthwhile) {
     if (chosen.length === count) break;
-    if (chosen.every((other) => staysClear(pass, other))) chosen.push(pass);
+    const here = chosen.filter((other) => other.stationId === pass.stationId).length;
+    if (here < MOST_AT_STATION && chosen.every((other) => staysClear(pass, other))) chosen.push(pass);
   }
   return chosen
     .sort((a, b) => a.riseAt.localeCompare(b.riseAt))
