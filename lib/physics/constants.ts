@@ -29,18 +29,6 @@ export const SUN_RADIUS_KM = 696000;
 /** Astronomical unit, km (IAU 2012 resolution B2, exact). */
 export const ASTRONOMICAL_UNIT_KM = 149597870.7;
 
-/** Speed of light in vacuum, km/s (SI, exact). */
-export const LIGHT_KM_PER_S = 299792.458;
-
-/** Stefan-Boltzmann constant, W/(m² K⁴) (CODATA 2018). */
-export const STEFAN_BOLTZMANN_W_PER_M2_K4 = 5.670374419e-8;
-
-/** Molar gas constant, J/(mol K) (SI, exact to the digits given). */
-export const GAS_CONSTANT_J_PER_MOL_K = 8.314462618;
-
-/** Standard gravity, m/s² (CGPM 1901, exact). */
-export const STANDARD_GRAVITY_M_PER_S2 = 9.80665;
-
 /** One degree in radians. */
 export const DEG = Math.PI / 180;
 

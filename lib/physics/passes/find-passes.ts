@@ -61,6 +61,7 @@ function run(search: Search, first: EarthFixedNode): string | null {
   while (node.atMs < toMs && failure === null) {
     const wanted = nextTime(search, node);
     const { end, badMs } = nodeOrLastGood(orbit, node, wanted);
+    if (widenForLateLanding(search, node, end)) continue;
     if (badMs !== null) failure = failureAt(orbit, badMs);
     const looking = tracks.filter((_, i) => isLookedAt(search, i, node.atMs, end.atMs));
     if (looking.length > 0 && end.atMs > node.atMs) {
@@ -69,9 +70,6 @@ function run(search: Search, first: EarthFixedNode): string | null {
         failure = failureWithin(orbit, node.atMs, end.atMs);
         break;
       }
-    } else if (widenForLateLanding(search, node, end)) {
-      failure = null;
-      continue;
     }
     node = end;
   }

@@ -29,7 +29,7 @@ const OFF_PLANE_ALLOWANCE_RAD = 1.2 * DEG;
 const PHASE_ALLOWANCE_RAD = 0.5 * DEG;
 const PHASE_ALLOWANCE_PER_TURN_RAD = 1 * DEG;
 
-/** Above this apogee radius or eccentricity, or beyond this half-angle of visibility, every stretch is looked at instead. */
+/** Above this apogee radius, eccentricity or half-angle of visibility every stretch is looked at instead. */
 const FARTHEST_SKIPPING_KM = 10_000;
 const MOST_ECCENTRIC_SKIPPING = 0.1;
 const WIDEST_SKIPPING_RAD = 60 * DEG;

@@ -119,17 +119,19 @@ export function isLookedAt(search: Search, i: number, fromMs: number, toMs: numb
   return window.fromMs < toMs && window.toMs > fromMs;
 }
 
+const seen = blankSighting();
+
 /**
- * A guard that should never act: when a jump ends with an object already above a station's limit, that
- * station's window is widened back to the node before the jump, and the jump is not made.
+ * A guard that should never act: when a station that is not looking would find an object above its limit at
+ * the next node, its window is widened back to the present one, and the step is to be chosen anew.
  */
-export function widenForLateLanding(search: Search, before: EarthFixedNode, landed: EarthFixedNode): boolean {
-  const seen = blankSighting();
+export function widenForLateLanding(search: Search, node: EarthFixedNode, next: EarthFixedNode): boolean {
   let late = false;
   for (const [i, track] of search.tracks.entries()) {
-    sightNode(track.sight, landed, seen);
-    if (seen.overKm <= 0 || landed.atMs <= before.atMs) continue;
-    search.windows[i] = { fromMs: before.atMs, toMs: landed.atMs + search.stepMs };
+    if (isLookedAt(search, i, node.atMs, next.atMs) || next.atMs <= node.atMs) continue;
+    sightNode(track.sight, next, seen);
+    if (seen.overKm <= 0) continue;
+    search.windows[i] = { fromMs: node.atMs, toMs: next.atMs + search.stepMs };
     late = true;
   }
   return late;

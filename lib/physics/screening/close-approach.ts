@@ -1,8 +1,8 @@
-import { EARTH_MU_KM3_PER_S2, TWO_PI } from "../constants";
+import { EARTH_MU_KM3_PER_S2, EARTH_RADIUS_KM } from "../constants";
 import type { EarthFixedNode } from "../orbit/earth-fixed";
 import { makePath, mustNode, type Path, PropagationFailure, pathAt } from "../orbit/path";
-import type { Orbit } from "../orbit/propagate";
-import { dot, norm, subtract, type Vec3 } from "../vector";
+import type { Orbit, OrbitState } from "../orbit/propagate";
+import { cross, dot, norm, subtract, type Vec3 } from "../vector";
 
 /** A moment at which two objects are nearer to each other than just before and after. */
 export interface CloseApproach {
@@ -21,8 +21,17 @@ export type ApproachScreening =
   | { readonly ok: true; readonly approaches: CloseApproach[] }
   | { readonly ok: false; readonly reason: string };
 
-/** What SGP4's short-period terms can add to the mean apogee and take from the mean perigee, km. */
+/** What the short-period terms can add to an osculating apogee and take from a perigee, km. */
 const FILTER_PAD_KM = 50;
+
+/** The same for the speed at perigee. */
+const SPEED_PAD = 1.03;
+
+/** Escape speed at the ground, km/s: nothing that comes down is faster. */
+const ESCAPE = Math.sqrt((2 * EARTH_MU_KM3_PER_S2) / EARTH_RADIUS_KM);
+
+/** What the polynomials of the first object's path can be off by, km, near the perigee of a long orbit. */
+const PATH_PAD_KM = 3;
 
 /** Near each other, objects are looked at this often: their relative motion is then nearly straight. */
 const STEP_MS = 30_000;
@@ -48,30 +57,68 @@ export function closeApproaches(args: {
 }): ApproachScreening[] {
   const { primary, others, fromMs, toMs, thresholdKm } = args;
   if (!(fromMs < toMs)) return others.map(() => ({ ok: true, approaches: [] }));
-  const stepS = PATH_STEP_RAD * Math.sqrt(shell(primary).perigeeKm ** 3 / EARTH_MU_KM3_PER_S2);
-  const path = makePath(primary, fromMs, toMs, Math.ceil((toMs - fromMs) / (1000 * stepS)));
-  return others.map((other) => {
-    if (shellGapKm(primary, other) > thresholdKm + FILTER_PAD_KM) return { ok: true, approaches: [] };
+  const screen = (other: Orbit): ApproachScreening => {
     try {
-      return { ok: true, approaches: follow(path, other, fromMs, toMs, thresholdKm) };
+      const [p, q] = [shellOver(primary, fromMs, toMs), shellOver(other, fromMs, toMs)];
+      if (shellGapKm(p, q) > thresholdKm + FILTER_PAD_KM) return { ok: true, approaches: [] };
+      path ??= makePath(primary, fromMs, toMs, stepsFor(p, fromMs, toMs));
+      const fastest = SPEED_PAD * (p.fastest + q.fastest);
+      return { ok: true, approaches: follow(path, other, fromMs, toMs, thresholdKm, fastest) };
     } catch (error) {
       if (!(error instanceof PropagationFailure)) throw error;
       return { ok: false, reason: error.message };
     }
-  });
+  };
+  let path: Path | null = null;
+  return others.map(screen);
 }
 
-/** Perigee and apogee radius, km, and speed at perigee, km/s, from the mean elements. */
-function shell(orbit: Orbit): { perigeeKm: number; apogeeKm: number; fastest: number } {
-  const semiMajorKm = Math.cbrt(EARTH_MU_KM3_PER_S2 / (TWO_PI / orbit.periodS) ** 2);
-  const e = orbit.elements.eccentricity;
-  const fastest = Math.sqrt((EARTH_MU_KM3_PER_S2 * (1 + e)) / (semiMajorKm * (1 - e)));
-  return { perigeeKm: semiMajorKm * (1 - e), apogeeKm: semiMajorKm * (1 + e), fastest };
+function stepsFor(shell: Shell, fromMs: number, toMs: number): number {
+  const stepS = PATH_STEP_RAD * Math.sqrt(shell.perigeeKm ** 3 / EARTH_MU_KM3_PER_S2);
+  return Math.ceil((toMs - fromMs) / (1000 * stepS));
 }
 
-function shellGapKm(a: Orbit, b: Orbit): number {
-  const [p, q] = [shell(a), shell(b)];
-  return Math.max(p.perigeeKm, q.perigeeKm) - Math.min(p.apogeeKm, q.apogeeKm);
+/** The shell an orbit keeps to, km from the Earth's centre, and its greatest speed, km/s. */
+interface Shell {
+  readonly perigeeKm: number;
+  readonly apogeeKm: number;
+  readonly fastest: number;
+}
+
+/**
+ * The shell by the osculating orbits at both ends of the time, since drag lowers it in between; down to the
+ * ground when the object comes down before the end. Throws PropagationFailure.
+ */
+function shellOver(orbit: Orbit, fromMs: number, toMs: number): Shell {
+  const start = osculatingShell(mustState(orbit, fromMs));
+  const last = orbit.stateAt(toMs);
+  const end = last.ok
+    ? osculatingShell(last.state)
+    : { ...start, perigeeKm: EARTH_RADIUS_KM, fastest: ESCAPE };
+  return {
+    perigeeKm: Math.min(start.perigeeKm, end.perigeeKm),
+    apogeeKm: Math.max(start.apogeeKm, end.apogeeKm),
+    fastest: Math.max(start.fastest, end.fastest),
+  };
+}
+
+function osculatingShell({ rKm, vKmPerS }: OrbitState): Shell {
+  const mu = EARTH_MU_KM3_PER_S2;
+  const semiMajorKm = 1 / (2 / norm(rKm) - dot(vKmPerS, vKmPerS) / mu);
+  const momentum = norm(cross(rKm, vKmPerS));
+  const e = Math.sqrt(Math.max(0, 1 - momentum ** 2 / (mu * semiMajorKm)));
+  const perigeeKm = semiMajorKm * (1 - e);
+  return { perigeeKm, apogeeKm: semiMajorKm * (1 + e), fastest: momentum / perigeeKm };
+}
+
+function mustState(orbit: Orbit, atMs: number): OrbitState {
+  const got = orbit.stateAt(atMs);
+  if (!got.ok) throw new PropagationFailure(got.reason);
+  return got.state;
+}
+
+function shellGapKm(a: Shell, b: Shell): number {
+  return Math.max(a.perigeeKm, b.perigeeKm) - Math.min(a.apogeeKm, b.apogeeKm);
 }
 
 /** Distance (km) and its growth (km²/s, distance times rate) at one time. */
@@ -89,14 +136,13 @@ function follow(
   fromMs: number,
   toMs: number,
   thresholdKm: number,
+  fastest: number,
 ): CloseApproach[] {
   const found: CloseApproach[] = [];
-  // 3 % more than at the mean perigee, for the short-period terms.
-  const fastest = 1.03 * (shell(path.orbit).fastest + shell(other).fastest);
   let last = distanceOnPath(path, other, fromMs);
   if (last.km <= thresholdKm && last.growth >= 0) found.push(describe(path.orbit, other, fromMs, true));
   while (last.atMs < toMs) {
-    const freeMs = (1000 * (last.km - thresholdKm - 1)) / fastest;
+    const freeMs = (1000 * (last.km - thresholdKm - PATH_PAD_KM)) / fastest;
     const atMs = Math.min(toMs, last.atMs + Math.max(STEP_MS, freeMs));
     const next = distanceOnPath(path, other, atMs);
     // Over a longer skip they cannot have come within the threshold.
@@ -154,17 +200,9 @@ function nearestTime(a: Orbit, b: Orbit, from: Distance, to: Distance): number {
 }
 
 function describe(a: Orbit, b: Orbit, atMs: number, atEdge: boolean): CloseApproach {
-  const [p, q] = [a.stateAt(atMs), b.stateAt(atMs)];
-  if (!p.ok) throw new PropagationFailure(p.reason);
-  if (!q.ok) throw new PropagationFailure(q.reason);
-  const relativeKm = subtract(q.state.rKm, p.state.rKm);
-  const relativeKmPerS = subtract(q.state.vKmPerS, p.state.vKmPerS);
-  return {
-    atMs,
-    missKm: Math.sqrt(dot(relativeKm, relativeKm)),
-    relativeSpeedKmPerS: norm(relativeKmPerS),
-    relativeKm,
-    relativeKmPerS,
-    atEdge,
-  };
+  const [p, q] = [mustState(a, atMs), mustState(b, atMs)];
+  const relativeKm = subtract(q.rKm, p.rKm);
+  const relativeKmPerS = subtract(q.vKmPerS, p.vKmPerS);
+  const [missKm, relativeSpeedKmPerS] = [norm(relativeKm), norm(relativeKmPerS)];
+  return { atMs, missKm, relativeSpeedKmPerS, relativeKm, relativeKmPerS, atEdge };
 }

@@ -3,6 +3,7 @@ import { describe, expect, it } from "vitest";
 import { makeOrbit, type Orbit } from "@/lib/physics/orbit/propagate";
 import { closeApproaches } from "@/lib/physics/screening/close-approach";
 import { norm, subtract } from "@/lib/physics/vector";
+import { mustOrbit } from "../../fixtures/orbits";
 import { elementsFromText } from "../../fixtures/read-tle";
 
 // Real element sets of 2021 (../shared/reference). The reference is a scan of SGP4 itself every five seconds,
@@ -24,18 +25,24 @@ function distanceKm(a: Orbit, b: Orbit, atMs: number): number {
   return norm(subtract(p.state.rKm, q.state.rKm));
 }
 
-function scan(a: Orbit, b: Orbit, fromMs: number, toMs: number): { atMs: number; km: number }[] {
+function scan(
+  a: Orbit,
+  b: Orbit,
+  fromMs: number,
+  toMs: number,
+  thresholdKm = THRESHOLD_KM,
+): { atMs: number; km: number }[] {
   const found: { atMs: number; km: number }[] = [];
   const stepMs = 5000;
   let [before, here] = [distanceKm(a, b, fromMs), distanceKm(a, b, fromMs + stepMs)];
   for (let at = fromMs + stepMs; at + stepMs <= toMs; at += stepMs) {
     const after = distanceKm(a, b, at + stepMs);
-    if (here <= before && here < after && here < THRESHOLD_KM + 50) {
+    if (here <= before && here < after && here < thresholdKm + 50) {
       // The square of the distance is a parabola to far better than the tolerance.
       const [l, m, r] = [before ** 2, here ** 2, after ** 2];
       const shift = (l - r) / (2 * (l - 2 * m + r));
       const km = Math.sqrt(Math.max(0, m - ((l - r) * shift) / 4));
-      if (km <= THRESHOLD_KM) found.push({ atMs: at + shift * stepMs, km });
+      if (km <= thresholdKm) found.push({ atMs: at + shift * stepMs, km });
     }
     [before, here] = [here, after];
   }
@@ -93,6 +100,30 @@ describe("closest approaches", () => {
     });
     expect(none).toEqual({ ok: true, approaches: [] });
     expect(failed).toEqual({ ok: false, reason: expect.stringContaining("Propagation fails at") });
+  });
+
+  it("follows an object that comes down through the other's shell", () => {
+    // Against each other in one plane, at first 125 km apart; drag closes the gap within days.
+    const { elements } = primary;
+    const round = { ...elements, eccentricity: 0.0005, inclinationDeg: 90 };
+    const sinking = mustOrbit({ ...round, meanMotionRevPerDay: 15.7, bstar: 0.03 });
+    const low = mustOrbit({
+      ...round,
+      meanMotionRevPerDay: 16.15,
+      raanDeg: elements.raanDeg + 180,
+      bstar: 1e-6,
+    });
+    const [start, end] = [elements.epochMs, elements.epochMs + 3 * 86_400_000];
+    const args = { primary: sinking, others: [low], thresholdKm: 60 };
+    const [early] = closeApproaches({ ...args, fromMs: start, toMs: start + 7_200_000 });
+    expect(early).toEqual({ ok: true, approaches: [] });
+    const wanted = scan(sinking, low, start, end, 60);
+    const [got] = closeApproaches({ ...args, fromMs: start, toMs: end });
+    if (!got?.ok) throw new Error(got?.reason ?? "no result");
+    expect(wanted.length).toBeGreaterThan(10);
+    expect(got.approaches.map((a) => Math.round(a.atMs / 1000))).toEqual(
+      wanted.map((w) => Math.round(w.atMs / 1000)),
+    );
   });
 
   it("reports the ends of the time when the objects are near there", () => {
