@@ -116,7 +116,11 @@ function faultsIn(files: readonly SourceFile[], judge: Judge): string[] {
 function namesDeclaredIn(source: ts.SourceFile): Set<string> {
   const names = new Set<string>();
   walk(source, (node) => {
-    const declares = ts.isVariableDeclaration(node) || ts.isParameter(node) || ts.isFunctionDeclaration(node) || ts.isBindingElement(node);
+    const declares =
+      ts.isVariableDeclaration(node) ||
+      ts.isParameter(node) ||
+      ts.isFunctionDeclaration(node) ||
+      ts.isBindingElement(node);
     if (declares && node.name && ts.isIdentifier(node.name)) names.add(node.name.text);
   });
   return names;
