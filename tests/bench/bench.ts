@@ -3,9 +3,10 @@ import type { Row } from "./clock";
 import { benchPasses } from "./pass-bench";
 import { catalogue, fragments } from "./population";
 import { benchSkyfield } from "./skyfield-bench";
+import { benchWorkers } from "./workers-bench";
 
-// npm run bench [-- --json]: how fast the searches are against plain ways to the same events. All figures are
-// processor time of one run; a ratio counts only when both sides found the same events.
+// npm run bench [-- --json]: how fast the searches are against plain ways to the same events. Figures are processor
+// time of one run, for the workers wall clock; a ratio counts only when both sides found the same events.
 
 /** `--quick` takes a tenth of everything, to try the benchmark itself. */
 const share = process.argv.includes("--quick") ? 10 : 1;
@@ -31,6 +32,7 @@ const rows = [
   ...(await benchPasses(population)),
   benchSkyfield(population, share === 1 ? 20 : 5),
   benchBeam(population.orbits, catalogue(population.orbits, 10_000 / share), 200 / share),
+  await benchWorkers(share === 1 ? 40 : 8),
 ];
 const peakMemoryMb = Math.round(process.resourceUsage().maxRSS / 1024);
 print(rows, peakMemoryMb);
