@@ -11,6 +11,7 @@ export interface InventedStation {
 
 const LIMITS = {
   maxElevationDeg: 86,
+  maxAzimuthRateDegPerS: 4,
   acquisitionS: 30,
   guardS: 2,
   slewS: 45,
@@ -40,6 +41,14 @@ export const INVENTED_STATIONS: readonly InventedStation[] = [
     station: {
       ...LIMITS,
       name: "Corvane Ridge",
+      horizonMask: [
+        { azimuthDeg: 0, elevationDeg: 12 },
+        { azimuthDeg: 35, elevationDeg: 31 },
+        { azimuthDeg: 75, elevationDeg: 18 },
+        { azimuthDeg: 140, elevationDeg: 8 },
+        { azimuthDeg: 250, elevationDeg: 28 },
+        { azimuthDeg: 290, elevationDeg: 15 },
+      ],
       latitudeDeg: 37.214,
       longitudeDeg: -2.546,
       altitudeM: 2168,
@@ -61,6 +70,11 @@ export const INVENTED_STATIONS: readonly InventedStation[] = [
     station: {
       ...LIMITS,
       name: "Tessaly Downs",
+      horizonMask: [
+        { azimuthDeg: 0, elevationDeg: 4 },
+        { azimuthDeg: 200, elevationDeg: 29 },
+        { azimuthDeg: 230, elevationDeg: 6 },
+      ],
       latitudeDeg: -31.482,
       longitudeDeg: 117.915,
       altitudeM: 412,
@@ -82,6 +96,13 @@ export const INVENTED_STATIONS: readonly InventedStation[] = [
     station: {
       ...LIMITS,
       name: "Île Marrec",
+      horizonMask: [
+        { azimuthDeg: 0, elevationDeg: 10 },
+        { azimuthDeg: 80, elevationDeg: 36 },
+        { azimuthDeg: 130, elevationDeg: 14 },
+        { azimuthDeg: 300, elevationDeg: 33 },
+        { azimuthDeg: 330, elevationDeg: 10 },
+      ],
       latitudeDeg: -21.108,
       longitudeDeg: 55.712,
       altitudeM: 2240,
@@ -103,6 +124,11 @@ export const INVENTED_STATIONS: readonly InventedStation[] = [
     station: {
       ...LIMITS,
       name: "Salt Pan North",
+      horizonMask: [
+        { azimuthDeg: 0, elevationDeg: 5 },
+        { azimuthDeg: 60, elevationDeg: 27 },
+        { azimuthDeg: 120, elevationDeg: 9 },
+      ],
       latitudeDeg: -23.874,
       longitudeDeg: -67.921,
       altitudeM: 2655,

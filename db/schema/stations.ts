@@ -11,6 +11,13 @@ export const stations = pgTable("stations", {
   timeZone: text("time_zone").notNull(),
   minElevationDeg: doublePrecision("min_elevation_deg").notNull(),
   maxElevationDeg: doublePrecision("max_elevation_deg").notNull(),
+  /** Horizon in steps: from each azimuth on, clockwise, nothing below the elevation is seen. */
+  horizonMask: jsonb("horizon_mask")
+    .$type<{ azimuthDeg: number; elevationDeg: number }[]>()
+    .notNull()
+    .default([]),
+  /** The mount can't turn faster in azimuth, which shuts it out near the zenith; null: no limit. */
+  maxAzimuthRateDegPerS: doublePrecision("max_azimuth_rate_deg_per_s"),
   /** Daily opening hours in UTC as minutes of the day, [from, to); from > to runs over midnight. */
   openingHours: jsonb("opening_hours").$type<{ fromMin: number; toMin: number }[]>().notNull(),
   /** Time from rise to a confirmed identity of the target. */

@@ -95,6 +95,9 @@ export interface PassSheetBody extends PassBody {
     readonly altitudeM: number;
     readonly minElevationDeg: number;
     readonly maxElevationDeg: number;
+    /** Horizon in steps: from each azimuth on, clockwise, up to the next. */
+    readonly horizonMask: readonly { readonly azimuthDeg: number; readonly elevationDeg: number }[];
+    readonly maxAzimuthRateDegPerS: number | null;
     readonly acquisitionS: number;
     readonly guardS: number;
     readonly minDwellS: number;

@@ -30,6 +30,10 @@ export interface StationBody {
   readonly timeZone: string;
   readonly minElevationDeg: number;
   readonly maxElevationDeg: number;
+  /** Horizon in steps: from each azimuth on, clockwise, nothing below the elevation is seen. */
+  readonly horizonMask: readonly { readonly azimuthDeg: number; readonly elevationDeg: number }[];
+  /** The mount's limit, which shuts it out near the zenith; null: none. */
+  readonly maxAzimuthRateDegPerS: number | null;
   /** Minutes of the UTC day, [from, to); from > to runs over midnight. */
   readonly openingHours: readonly { readonly fromMin: number; readonly toMin: number }[];
   readonly acquisitionS: number;

@@ -3,6 +3,7 @@ import { lookAngles, temeToEcef } from "@/lib/physics/frames/earth";
 import type { Orbit } from "@/lib/physics/orbit/propagate";
 import { airspaceKey, type PlacedVolume, type StationMap } from "./airspace";
 import { type Pointing, volumeSpans } from "./airspace-stretches";
+import { highestMaskDeg, type MaskStep } from "./horizon-mask";
 import { type Interval, merge } from "./interval";
 import type { PassGeometry } from "./pass-geometry";
 
@@ -11,6 +12,13 @@ export interface ElevationLimits {
   readonly version: number;
   readonly minElevationDeg: number;
   readonly maxElevationDeg: number;
+  readonly horizonMask?: readonly MaskStep[];
+  readonly maxAzimuthRateDegPerS?: number | null;
+}
+
+/** Where the beam points, and how fast the mount turns in azimuth. */
+interface Sight extends Pointing {
+  readonly azimuthRateRadPerS: number;
 }
 
 /** Rise and set are kept to a millisecond; so much under the floor is not a finding, degrees. */
@@ -41,9 +49,9 @@ export function measurePass(args: {
   const pointed = pointings(orbit, map, sampleTimes(pass));
   if (!pointed.ok) return pointed;
   const { samples } = pointed;
-  const pointingAt = (atMs: number): Pointing => pointing(orbit, map, atMs) ?? nearest(samples, atMs);
-  const elevationDeg = (p: Pointing) => p.elevationRad / DEG;
-  const outside = (isOut: (p: Pointing) => boolean) => spansWhere(samples, pointingAt, isOut);
+  const pointingAt = (atMs: number): Sight => pointing(orbit, map, atMs) ?? nearest(samples, atMs);
+  const elevationDeg = (p: Sight) => p.elevationRad / DEG;
+  const outside = (isOut: (p: Sight) => boolean) => spansWhere(samples, pointingAt, isOut);
   const geometry: PassGeometry = {
     elementSetId: args.elementSetId,
     riseMs: pass.riseMs,
@@ -53,12 +61,27 @@ export function measurePass(args: {
     stationVersion: limits.version,
     belowFloor: outside((p) => elevationDeg(p) < limits.minElevationDeg - FLOOR_TOLERANCE_DEG),
     aboveCeiling: outside((p) => elevationDeg(p) > limits.maxElevationDeg),
+    belowMask: outside((p) => elevationDeg(p) < maskAround(limits.horizonMask ?? [], p)),
+    tooFast: outside((p) => Math.abs(p.azimuthRateRadPerS) / DEG > fastestOf(limits)),
     airspaceKey: airspaceKey(volumes),
     volumes: volumes
       .map((volume) => ({ volumeId: volume.id, spans: volumeSpans({ map, volume, samples, pointingAt }) }))
       .filter((found) => found.spans.length > 0),
   };
   return { ok: true, geometry };
+}
+
+/**
+ * The highest horizon over all azimuths that the beam passes within half a step to both sides: a tooth of the
+ * mask narrower than a step can't hide between two samples; it closes up to half a second more.
+ */
+function maskAround(mask: readonly MaskStep[], at: Sight): number {
+  const aroundDeg = (Math.abs(at.azimuthRateRadPerS) / DEG) * (STEP_MS / 2000);
+  return highestMaskDeg(mask, at.azimuthRad / DEG, aroundDeg);
+}
+
+function fastestOf(limits: ElevationLimits): number {
+  return limits.maxAzimuthRateDegPerS ?? Number.POSITIVE_INFINITY;
 }
 
 /** From rise to set at equal steps of at most a second, and the culmination, so that no peak hides. */
@@ -73,24 +96,25 @@ function pointings(
   orbit: Orbit,
   map: StationMap,
   times: readonly number[],
-): { ok: true; samples: Pointing[] } | { ok: false; reason: string } {
-  const samples: Pointing[] = [];
+): { ok: true; samples: Sight[] } | { ok: false; reason: string } {
+  const samples: Sight[] = [];
   for (const atMs of times) {
     const found = orbit.stateAt(atMs);
     if (!found.ok) return found;
     const look = lookAngles(map.frame, temeToEcef(found.state, atMs));
-    samples.push({ atMs, azimuthRad: look.azimuthRad, elevationRad: look.elevationRad });
+    const { azimuthRad, elevationRad, azimuthRateRadPerS } = look;
+    samples.push({ atMs, azimuthRad, elevationRad, azimuthRateRadPerS });
   }
   return { ok: true, samples };
 }
 
-function pointing(orbit: Orbit, map: StationMap, atMs: number): Pointing | null {
+function pointing(orbit: Orbit, map: StationMap, atMs: number): Sight | null {
   const found = pointings(orbit, map, [atMs]);
   return found.ok ? (found.samples[0] ?? null) : null;
 }
 
 /** Stands in where the orbit has no state between two that it has. */
-function nearest(samples: readonly Pointing[], atMs: number): Pointing {
+function nearest(samples: readonly Sight[], atMs: number): Sight {
   return samples.reduce((best, next) =>
     Math.abs(next.atMs - atMs) < Math.abs(best.atMs - atMs) ? next : best,
   );
@@ -98,9 +122,9 @@ function nearest(samples: readonly Pointing[], atMs: number): Pointing {
 
 /** Stretches of samples where the condition holds, edges halved to 0.1 s and laid on the outer side. */
 function spansWhere(
-  samples: readonly Pointing[],
-  pointingAt: (atMs: number) => Pointing,
-  holds: (pointing: Pointing) => boolean,
+  samples: readonly Sight[],
+  pointingAt: (atMs: number) => Sight,
+  holds: (pointing: Sight) => boolean,
 ): Interval[] {
   const spans: Interval[] = [];
   for (const [i, to] of samples.entries()) {
@@ -116,10 +140,10 @@ function spansWhere(
 
 /** Halves between a sample where the condition holds and one where it doesn't; the outer side of the edge. */
 function edgeMs(
-  inside: Pointing,
-  outside: Pointing,
-  pointingAt: (atMs: number) => Pointing,
-  holds: (pointing: Pointing) => boolean,
+  inside: Sight,
+  outside: Sight,
+  pointingAt: (atMs: number) => Sight,
+  holds: (pointing: Sight) => boolean,
 ): number {
   let [innerMs, outerMs] = [inside.atMs, outside.atMs];
   while (Math.abs(outerMs - innerMs) > 100) {

@@ -1,3 +1,4 @@
+import type { MaskStep } from "./horizon-mask";
 import type { Interval } from "./interval";
 import type { ProtectedClass } from "./keep-out";
 
@@ -12,6 +13,8 @@ export interface StationFacts extends Named {
   readonly version: number;
   readonly minElevationDeg: number;
   readonly maxElevationDeg: number;
+  readonly horizonMask?: readonly MaskStep[];
+  readonly maxAzimuthRateDegPerS?: number | null;
   /** Minutes of the UTC day, [from, to); from > to runs over midnight. */
   readonly openingHours: readonly { readonly fromMin: number; readonly toMin: number }[];
   readonly slewS: number;

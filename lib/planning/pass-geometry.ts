@@ -25,6 +25,9 @@ export interface StoredGeometry {
   /** Stretches under the station's elevation floor or over its ceiling; rise and set lie at the floor. */
   readonly belowFloor: readonly Interval[];
   readonly aboveCeiling: readonly Interval[];
+  /** Stretches behind the station's horizon mask, and those too fast for its mount in azimuth. */
+  readonly belowMask?: readonly Interval[];
+  readonly tooFast?: readonly Interval[];
   /** Which volumes were examined, with their versions; see {@link airspaceKey} in airspace.ts. */
   readonly airspaceKey: string;
   /** Volumes that the beam runs through. */

@@ -125,8 +125,16 @@ export function planInputs(laserVersion: number, body: FragmentBody, limits: Dwe
 }
 
 function storedGeometry(pass: PassGeometry): StoredGeometry {
-  const { stationVersion, belowFloor, aboveCeiling, airspaceKey, volumes } = pass;
-  return { stationVersion, belowFloor, aboveCeiling, airspaceKey, volumes };
+  const {
+    stationVersion,
+    belowFloor,
+    aboveCeiling,
+    belowMask = [],
+    tooFast = [],
+    airspaceKey,
+    volumes,
+  } = pass;
+  return { stationVersion, belowFloor, aboveCeiling, belowMask, tooFast, airspaceKey, volumes };
 }
 
 /** Evenly spaced points of the profile, rounded to what a picture shows. */

@@ -18,6 +18,8 @@ export function stationBody(scene: StationScene): PassSheetBody["station"] {
     altitudeM: station.altitudeM,
     minElevationDeg: station.minElevationDeg,
     maxElevationDeg: station.maxElevationDeg,
+    horizonMask: station.horizonMask,
+    maxAzimuthRateDegPerS: station.maxAzimuthRateDegPerS,
     acquisitionS: station.acquisitionS,
     guardS: station.guardS,
     minDwellS: station.minDwellS,

@@ -52,12 +52,13 @@ function planUpdate(book: FactBook, row: PassRow, elements: Elements | undefined
 
 /** A plan that only says why there is none; it fits no figures, so it is made anew once there are some. */
 function refusedPlan(geometry: ReturnType<typeof measureRow>, refusal: string): StoredPlan {
-  const { elementSetId, stationVersion, belowFloor, aboveCeiling, airspaceKey, volumes } = geometry;
+  const { elementSetId, stationVersion, belowFloor, aboveCeiling, belowMask = [], tooFast = [] } = geometry;
+  const { airspaceKey, volumes } = geometry;
   return {
     elementSetId,
     laserSettingVersion: 0,
     inputs: "",
-    geometry: { stationVersion, belowFloor, aboveCeiling, airspaceKey, volumes },
+    geometry: { stationVersion, belowFloor, aboveCeiling, belowMask, tooFast, airspaceKey, volumes },
     aim: AIM,
     aimUnit: "",
     strip: { elevationDeg: [], worthPerS: [] },

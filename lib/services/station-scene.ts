@@ -56,13 +56,15 @@ export function makeScene(row: StationRow, coordination: Coordination): StationS
 
 function stationFacts(station: StationRow["station"]): StationFacts {
   const { id, name, version, minElevationDeg, maxElevationDeg } = station;
-  const { openingHours, slewS, coolDownS, elementAgeLimitH } = station;
+  const { horizonMask, maxAzimuthRateDegPerS, openingHours, slewS, coolDownS, elementAgeLimitH } = station;
   return {
     id,
     name,
     version,
     minElevationDeg,
     maxElevationDeg,
+    horizonMask,
+    maxAzimuthRateDegPerS,
     openingHours,
     slewS,
     coolDownS,

@@ -27,7 +27,13 @@ export function AfterDwell({ engagementId }: { readonly engagementId: string }) 
         data ? (
           <>
             Protected objects nearer than {numberText(data.thresholdKm, 1)} km from <UtcTime at={data.from} />{" "}
-            to <UtcTime at={data.to} />.
+            to <UtcTime at={data.to} />
+            {data.updatedAt ? (
+              <>
+                , screened at <UtcTime at={data.updatedAt} />
+              </>
+            ) : null}
+            .
           </>
         ) : undefined
       }

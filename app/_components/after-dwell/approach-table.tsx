@@ -13,22 +13,15 @@ interface ApproachTableProps {
 
 /** Close approaches of one of the two ways, by time. */
 export function ApproachTable({ caption, rows, none }: ApproachTableProps) {
-  if (rows.length === 0) {
-    return (
-      <div>
-        <h3 className="font-semibold">{caption}</h3>
-        <p>{none}</p>
-      </div>
-    );
-  }
   return (
-    <DataTable
-      caption={caption}
-      captionShown
-      columns={COLUMNS}
-      rows={rows}
-      keyOf={(row) => `${row.name} ${row.at}`}
-    />
+    <div>
+      <h3 className="mb-1 font-semibold">{caption}</h3>
+      {rows.length === 0 ? (
+        <p>{none}</p>
+      ) : (
+        <DataTable caption={caption} columns={COLUMNS} rows={rows} keyOf={(row) => `${row.name} ${row.at}`} />
+      )}
+    </div>
   );
 }
 

@@ -61,6 +61,7 @@ export function SkyChart({ sheet, dwell, overlay }: SkyChartProps) {
         The station's sky from below the zenith, north up, east right. Thick: the dwell. Broken: where a
         protected object closes the beam. Dotted: protected objects near the beam, ringed where nearest.
         Dashed circles: elevation floor {station.minElevationDeg}° and ceiling {station.maxElevationDeg}°.
+        {station.horizonMask.length > 0 ? " Filled from the rim: behind the horizon mask." : ""}
       </figcaption>
     </figure>
   );

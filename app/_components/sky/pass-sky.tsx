@@ -7,6 +7,7 @@ import { SkyChart } from "@/app/_components/pass-sheet/sky-chart";
 import { Section } from "@/app/_components/section";
 import type { PassSkyBody } from "@/lib/contracts/pass-surroundings";
 import type { PassSheetBody } from "@/lib/contracts/passes";
+import { HorizonMask } from "./horizon-mask";
 import { NearTable } from "./near-table";
 import { SkyFigures } from "./sky-figures";
 import { SkyOverlay } from "./sky-overlay";
@@ -26,7 +27,18 @@ interface PassSkyProps {
 /** The sky chart with Sun, Moon and near objects; the chart itself doesn't wait for them. */
 export function PassSky({ sheet, dwell }: PassSkyProps) {
   const { data: sky } = usePassSky(sheet.id);
-  return <SkyChart sheet={sheet} dwell={dwell} overlay={sky ? <SkyOverlay sky={sky} /> : null} />;
+  return (
+    <SkyChart
+      sheet={sheet}
+      dwell={dwell}
+      overlay={
+        <>
+          <HorizonMask mask={sheet.station.horizonMask} />
+          {sky ? <SkyOverlay sky={sky} /> : null}
+        </>
+      }
+    />
+  );
 }
 
 /** What stands near the beam, and how it is lit. */

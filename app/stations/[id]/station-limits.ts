@@ -9,6 +9,19 @@ export function stationLimits(station: StationBody): Fact[] {
     { label: "Lowest elevation", value: `${settingText(station.minElevationDeg)}°` },
     { label: "Highest elevation", value: `${settingText(station.maxElevationDeg)}°` },
     {
+      label: "Fastest in azimuth",
+      value:
+        station.maxAzimuthRateDegPerS === null
+          ? "no limit"
+          : `${settingText(station.maxAzimuthRateDegPerS)}°/s`,
+      note: "shuts the mount out near the zenith",
+    },
+    {
+      label: "Horizon mask",
+      value: station.horizonMask.length === 0 ? "none" : maskText(station.horizonMask),
+      note: "from each azimuth on, clockwise",
+    },
+    {
       label: "Acquisition",
       value: seconds(station.acquisitionS),
       note: "from rise to a confirmed identity: no dwell before",
@@ -30,4 +43,11 @@ export function stationLimits(station: StationBody): Fact[] {
     },
   ];
   return limits.map((fact) => ({ ...fact, figure: true }));
+}
+
+/** "28° from 340°, 12° from 30°". */
+function maskText(mask: StationBody["horizonMask"]): string {
+  return mask
+    .map((step) => `${settingText(step.elevationDeg)}° from ${settingText(step.azimuthDeg)}°`)
+    .join(", ");
 }

@@ -1,9 +1,11 @@
 import type { Closure } from "../closure";
 import { subtract } from "../interval";
+import type { PassFacts } from "../pass-facts";
+import type { PassGeometry } from "../pass-geometry";
 import { degreeWords, timeWords } from "../words";
 import { type Rule, wholePass } from "./rule";
 
-/** Elevation floor and ceiling of the station; nothing outside rise and set; nothing for a vanished pass. */
+/** Elevation floor and ceiling of the station, its horizon mask and its mount; nothing outside rise and set; nothing for a vanished pass. */
 export const visibility: Rule = (pass, facts) => {
   const { station } = facts;
   const common = {
@@ -58,5 +60,30 @@ export const visibility: Rule = (pass, facts) => {
       liftedBy: "a higher elevation ceiling in the station's settings",
     });
   }
-  return closures;
+  return [...closures, ...masked(pass, facts)];
 };
+
+/** What stands behind the horizon mask, or moves too fast for the mount. */
+function masked(pass: PassGeometry, { station }: PassFacts): Closure[] {
+  const common = {
+    rule: "visibility",
+    verdict: "closed",
+    input: `station ${station.name}, version ${station.version}`,
+    overridable: false,
+  } as const;
+  const behind = (pass.belowMask ?? []).map((span) => ({
+    ...common,
+    ...span,
+    cause: `The fragment stands below the horizon mask of ${station.name}.`,
+    label: "below horizon mask",
+    liftedBy: "another horizon mask in the station's settings",
+  }));
+  const fast = (pass.tooFast ?? []).map((span) => ({
+    ...common,
+    ...span,
+    cause: `Near the zenith the mount of ${station.name} would have to turn faster than ${degreeWords(station.maxAzimuthRateDegPerS ?? 0)} a second in azimuth.`,
+    label: "too fast near zenith",
+    liftedBy: "a faster mount in the station's settings",
+  }));
+  return [...behind, ...fast];
+}

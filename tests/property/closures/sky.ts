@@ -3,7 +3,7 @@ import { makeOrbit } from "@/lib/physics/orbit/propagate";
 import { findPasses } from "@/lib/physics/passes/find-passes";
 import { placeVolume, stationMap, type VolumeShape } from "@/lib/planning/airspace";
 import type { FragmentBody, PulsedLaser } from "@/lib/planning/laser";
-import { measurePass } from "@/lib/planning/measure-pass";
+import { type ElevationLimits, measurePass } from "@/lib/planning/measure-pass";
 
 /** An invented station, fragment and laser, with one real pass between them. */
 const EPOCH = Date.UTC(2031, 3, 5, 18);
@@ -69,7 +69,7 @@ export const PASSES = found.passes
 /** A pass measured against a ceiling and volumes. Throws where the orbit gives none. */
 export function measured(
   pass: (typeof PASSES)[number],
-  limits: typeof LIMITS,
+  limits: ElevationLimits,
   volumes: readonly VolumeShape[],
 ) {
   const placed = volumes.map((volume) => placeVolume(MAP, volume));
