@@ -153,6 +153,8 @@ describe("from an import to a confirmed engagement", () => {
         await route.fulfill({ response, json: { ...sheet, commands } });
       });
       await page.goto(`/engagements/${engagementId}`);
+      // Coming back to a page reads it anew, but not within five seconds of the last time.
+      await page.waitForTimeout(5_500);
       await page.evaluate("window.dispatchEvent(new Event('focus'))");
       await page.getByRole("button", { name: "Record firing" }).click();
       await page.getByRole("button", { name: "Keep this record" }).click();
