@@ -48,7 +48,7 @@ describe("the calendar", () => {
       const booked = await book(planner, other);
       const page = await desk.open(planner);
       await page.goto(`/calendar?show=day&at=${booked.from.slice(0, 10)}T00:00Z&station=${booked.stationId}`);
-      await page.getByRole("button", { name: new RegExp(`^E-${booked.number}, proposed`) }).press("Enter");
+      await page.getByRole("button", { name: new RegExp(`^E-${booked.number} proposed`) }).press("Enter");
       await page.getByRole("button", { name: "Move", exact: true }).click();
       await page.getByRole("button", { name: "Dwell to: earlier by 1 s" }).click();
       await page.getByRole("button", { name: "Move and send revised notices" }).click();
@@ -82,8 +82,9 @@ describe("the calendar", () => {
       const page = await desk.open(planner);
       const hour = booked.from.slice(0, 13);
       await page.goto(`/calendar?show=day&zoom=1&at=${hour}:00Z&station=${booked.stationId}`);
-      const entry = page.getByRole("button", { name: new RegExp(`^E-${booked.number}, proposed`) });
-      // Hovering waits until it stands still.
+      const entry = page.getByRole("button", { name: new RegExp(`^E-${booked.number} proposed`) });
+      // In the middle, so that the drop lies inside the grid too; hovering waits until it stands still.
+      await entry.evaluate((el) => el.scrollIntoView({ block: "center" }));
       await entry.hover({ position: { x: 20, y: 6 } });
       const before = await entry.boundingBox();
       if (!before) throw new Error("the engagement is not drawn");

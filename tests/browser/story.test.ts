@@ -191,7 +191,7 @@ describe("from an import to a confirmed engagement", () => {
       expect(all).toContain("confirmed engagement");
       expect(all).toContain(demoPerson("operator", 1).name);
       await page.goto(`/calendar?show=day&at=${pass.dwell.from.slice(0, 10)}T00:00Z`);
-      const entry = page.getByRole("button", { name: new RegExp(`^E-${number}, confirmed: `) });
+      const entry = page.getByRole("button", { name: new RegExp(`^E-${number} confirmed `) });
       await entry.waitFor();
       await entry.focus();
       await page.keyboard.press("Enter");

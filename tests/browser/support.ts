@@ -110,7 +110,8 @@ export async function bookablePass(person: Access): Promise<Bookable> {
     .filter((p): p is Bookable => p.dwell !== null && p.engagementId === null)
     // What a test imports is swept while other tests go on: its passes may still change.
     .filter((p) => p.catalogNumber !== IMPORTED_NUMBER)
-    .filter((p) => !p.closures.some((c) => c.rule === "airspace" || c.verdict === "not checked"))
+    .filter((p) => p.closures.every((c) => c.verdict === "closed" || c.rule === "authority answers"))
+    .filter((p) => !p.closures.some((c) => c.rule === "airspace"))
     .sort((a, b) => b.dwell.semiMajorAxisDropM - a.dwell.semiMajorAxisDropM);
   const [best] = fit;
   if (!best) throw new Error(`none of ${passes.length} passes can be booked`);

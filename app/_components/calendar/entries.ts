@@ -36,9 +36,15 @@ export function offerName({ pass, opening }: OfferEntry): string {
   return `Book ${pass.fragmentName} over ${pass.stationName}, open from ${opening.from.slice(11, 19)}Z to ${opening.to.slice(11, 19)}Z, orbit ${heightText(-(pass.dwell?.semiMajorAxisDropM ?? 0))}`;
 }
 
-/** An engagement in a sentence. */
+/** The same in the grid, beginning with the words that the entry shows. */
+export function offerEntryName(entry: OfferEntry): string {
+  const { pass, opening } = entry;
+  return `${offerTitle(entry)} ${pass.stationName}, open from ${opening.from.slice(11, 19)}Z to ${opening.to.slice(11, 19)}Z: book`;
+}
+
+/** An engagement in a sentence, beginning with the words that its entry shows. */
 export function engagementName(e: EngagementBody): string {
-  return `E-${e.number}, ${e.state}: ${e.fragmentName} over ${e.stationName}, ${e.from.slice(0, 10)} ${e.from.slice(11, 19)}Z to ${e.to.slice(11, 19)}Z`;
+  return `E-${e.number} ${e.state} ${e.from.slice(11, 19)}Z ${e.fragmentName} over ${e.stationName}, until ${e.to.slice(11, 19)}Z on ${e.from.slice(0, 10)}`;
 }
 
 /** Only the planner who booked it moves an engagement; in the calendar while it is proposed. */

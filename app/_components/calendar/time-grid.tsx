@@ -8,7 +8,7 @@ import { useEffect, useMemo, useRef } from "react";
 import { utcTimeOfDay } from "@/app/_format/utc";
 import type { EngagementBody } from "@/lib/contracts/engagements";
 import { type CalendarView, spanOfView, type Zoom } from "./calendar-view";
-import { engagementName, mayDrag, type OfferEntry, offerName, offerTitle } from "./entries";
+import { engagementName, mayDrag, type OfferEntry, offerEntryName, offerTitle } from "./entries";
 
 export interface TimeGridProps {
   readonly view: CalendarView & { readonly show: "week" | "day" };
@@ -136,7 +136,7 @@ function offerEvent(offer: OfferEntry): EventInput {
     end: offer.opening.to,
     editable: false,
     classNames: ["entry", "entry-offer"],
-    extendedProps: { offer, name: offerName(offer), rank: 1 },
+    extendedProps: { offer, name: offerEntryName(offer), rank: 1 },
   };
 }
 
@@ -151,8 +151,7 @@ function EntryContent({ event }: { readonly event: EventApi }) {
   }
   return (
     <span className="entry-words">
-      <b>{event.title}</b> {engagement.state} <span className="figures">{utcTimeOfDay(engagement.from)}</span>{" "}
-      {engagement.fragmentName}
+      <b>{event.title}</b> {`${engagement.state} ${utcTimeOfDay(engagement.from)} ${engagement.fragmentName}`}
     </span>
   );
 }
