@@ -1,5 +1,6 @@
 import { DwellHandles } from "@/app/_components/pass-strip/dwell-handles";
 import { PassStrip } from "@/app/_components/pass-strip/pass-strip";
+import { stripClosures } from "@/app/_components/pass-strip/strip-of-pass";
 import { numberText } from "@/app/_format/figures";
 import { utcTimeOfDay } from "@/app/_format/utc";
 import type { PassSheetBody } from "@/lib/contracts/passes";
@@ -16,14 +17,7 @@ interface DwellStripProps {
 export function DwellStrip({ sheet, dwell, onChange }: DwellStripProps) {
   const riseMs = Date.parse(sheet.riseAt);
   const setMs = Date.parse(sheet.setAt);
-  const closures = sheet.closures
-    .map((c) => ({
-      fromMs: Date.parse(c.from),
-      toMs: Date.parse(c.to),
-      verdict: c.verdict,
-      label: c.label,
-    }))
-    .sort((a, b) => a.fromMs - b.fromMs);
+  const closures = stripClosures(sheet);
   return (
     <div className="mt-4">
       <PassStrip

@@ -1,5 +1,6 @@
 import { durationText, numberText } from "@/app/_format/figures";
 import type { PassBody } from "@/lib/contracts/passes";
+import type { StripClosure } from "./closure-marks";
 import { PassStrip, type StripProps } from "./pass-strip";
 
 /** The strip of a pass as the API gives it; the booked dwell stands in for the offered one. */
@@ -12,18 +13,27 @@ export function StripOfPass({ pass, size }: { readonly pass: PassBody; readonly 
       setMs={Date.parse(pass.setAt)}
       elevationDeg={pass.strip.elevationDeg}
       worthPerS={pass.strip.worthPerS}
-      closures={pass.closures
-        .map((c) => ({
-          fromMs: Date.parse(c.from),
-          toMs: Date.parse(c.to),
-          verdict: c.verdict,
-          label: c.label,
-        }))
-        .sort((a, b) => a.fromMs - b.fromMs)}
+      closures={stripClosures(pass)}
       dwell={span ? { fromMs: Date.parse(span.from), toMs: Date.parse(span.to) } : null}
       name={nameOf(pass)}
     />
   );
+}
+
+/**
+ * The closures that a strip draws, in time order. Of a pass that is over, time itself is not drawn: it
+ * would hatch the whole picture and hide what was planned.
+ */
+export function stripClosures(pass: Pick<PassBody, "closures" | "setAt">): StripClosure[] {
+  return pass.closures
+    .filter((c) => c.rule !== "time passed" || c.to < pass.setAt)
+    .map((c) => ({
+      fromMs: Date.parse(c.from),
+      toMs: Date.parse(c.to),
+      verdict: c.verdict,
+      label: c.label,
+    }))
+    .sort((a, b) => a.fromMs - b.fromMs);
 }
 
 /** The picture in one sentence. */
