@@ -39,7 +39,7 @@ export const ENGAGEMENT_COLUMNS: readonly Column<EngagementBody>[] = [
     ),
   },
   {
-    head: "Orbit drops by",
+    head: "Change of orbit",
     figure: true,
     cell: (e) => <span className="whitespace-nowrap">{heightText(-e.semiMajorAxisDropM)}</span>,
   },

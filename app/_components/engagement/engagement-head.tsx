@@ -6,8 +6,12 @@ import { durationText } from "@/app/_format/figures";
 import type { EngagementSheetBody } from "@/lib/contracts/engagements";
 
 /** Number, state, what over where, and the dwell in UTC and at the station. */
-export function EngagementHead(props: { readonly sheet: EngagementSheetBody; readonly zone: string | null }) {
-  const { sheet, zone } = props;
+export function EngagementHead(props: {
+  readonly sheet: EngagementSheetBody;
+  readonly zone: string | null;
+  readonly readsBook: boolean;
+}) {
+  const { sheet, zone, readsBook } = props;
   const lengthS = (Date.parse(sheet.to) - Date.parse(sheet.from)) / 1000;
   const local = zone ? { zone } : {};
   return (
@@ -24,14 +28,9 @@ export function EngagementHead(props: { readonly sheet: EngagementSheetBody; rea
         }
       >
         <p className="text-base text-ink">
-          <Link href={`/fragments/${sheet.fragmentId}`} className="link text-ink">
-            {sheet.fragmentName}
-          </Link>{" "}
-          over{" "}
-          <Link href={`/stations/${sheet.stationId}`} className="link text-ink">
-            {sheet.stationName}
-          </Link>
-          , booked by {sheet.planner}
+          <Named href={readsBook ? `/fragments/${sheet.fragmentId}` : null}>{sheet.fragmentName}</Named> over{" "}
+          <Named href={readsBook ? `/stations/${sheet.stationId}` : null}>{sheet.stationName}</Named>, booked
+          by {sheet.planner}
         </p>
         {sheet.endReason ? <p className="mt-1 text-ink">Ended: {sheet.endReason}</p> : null}
       </PageHeader>
@@ -53,5 +52,14 @@ export function EngagementHead(props: { readonly sheet: EngagementSheetBody; rea
         </dd>
       </dl>
     </div>
+  );
+}
+
+function Named({ href, children }: { readonly href: string | null; readonly children: string }) {
+  if (href === null) return <strong>{children}</strong>;
+  return (
+    <Link href={href} className="link text-ink">
+      {children}
+    </Link>
   );
 }

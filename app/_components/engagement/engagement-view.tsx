@@ -23,10 +23,12 @@ import { WordsGiven } from "./words-given";
 
 interface EngagementViewProps {
   readonly initial: EngagementSheetBody;
+  /** Coordinators don't: fragments and stations are no links for them. */
+  readonly readsBook: boolean;
 }
 
 /** One engagement in full, read anew every half minute. */
-export function EngagementView({ initial }: EngagementViewProps) {
+export function EngagementView({ initial, readsBook }: EngagementViewProps) {
   const {
     data: sheet = initial,
     error,
@@ -41,7 +43,7 @@ export function EngagementView({ initial }: EngagementViewProps) {
   });
   return (
     <div className="grid gap-5">
-      <EngagementHead sheet={sheet} zone={pass?.station.timeZone ?? null} />
+      <EngagementHead sheet={sheet} zone={pass?.station.timeZone ?? null} readsBook={readsBook} />
       {error ? (
         <ErrorNote error={error} title="It could not be read anew; this is the last state known" />
       ) : null}
@@ -60,29 +62,7 @@ export function EngagementView({ initial }: EngagementViewProps) {
           <FiringRecord firing={sheet.firing} />
         </Section>
       ) : null}
-      <Section
-        title="The dwell"
-        intro="Predicted when it was booked, from the element set of then."
-        actions={
-          <Link className="act" href={`/passes/${sheet.passId}`}>
-            Open the pass
-          </Link>
-        }
-      >
-        <EffectFigures estimate={sheet.effect} />
-        <div className="mt-4">
-          {pass ? <StripOfPass pass={{ ...pass, booked: sheet }} size="large" /> : null}
-          {!pass && !passError ? <p role="status">Reading the pass …</p> : null}
-          <ErrorNote error={passError} title="The pass could not be read" />
-        </div>
-        {sheet.closures.length > 0 ? (
-          <div className="mt-4">
-            <h3 className="font-semibold">What touches these seconds</h3>
-            <ClosureList closures={sheet.closures} />
-          </div>
-        ) : null}
-        <Caution />
-      </Section>
+      <DwellPart sheet={sheet} pass={pass} passError={passError} />
       <AfterDwell engagementId={sheet.id} />
       <Section title="Notices and answers">
         <NoticeList notices={sheet.notices} />
@@ -93,5 +73,44 @@ export function EngagementView({ initial }: EngagementViewProps) {
         </Section>
       ) : null}
     </div>
+  );
+}
+
+interface DwellPartProps {
+  readonly sheet: EngagementSheetBody;
+  readonly pass: PassSheetBody | undefined;
+  readonly passError: unknown;
+}
+
+/** What the dwell was predicted to do, and where it lies in its pass. */
+function DwellPart({ sheet, pass, passError }: DwellPartProps) {
+  // What has ended is not for booking: today's closures would only cover what was.
+  const ended = ["fired", "scrubbed", "lapsed"].includes(sheet.state);
+  return (
+    <Section
+      title="The dwell"
+      intro="Predicted when it was booked, from the element set of then."
+      actions={
+        <Link className="act" href={`/passes/${sheet.passId}`}>
+          Open the pass
+        </Link>
+      }
+    >
+      <EffectFigures estimate={sheet.effect} />
+      <div className="mt-4">
+        {pass ? (
+          <StripOfPass pass={{ ...pass, booked: sheet, closures: ended ? [] : pass.closures }} size="large" />
+        ) : null}
+        {!pass && !passError ? <p role="status">Reading the pass …</p> : null}
+        <ErrorNote error={passError} title="The pass could not be read" />
+      </div>
+      {sheet.closures.length > 0 ? (
+        <div className="mt-4">
+          <h3 className="font-semibold">What touches these seconds</h3>
+          <ClosureList closures={sheet.closures} />
+        </div>
+      ) : null}
+      <Caution />
+    </Section>
   );
 }

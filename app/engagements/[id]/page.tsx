@@ -2,6 +2,7 @@ import { notFound } from "next/navigation";
 import { EngagementView } from "@/app/_components/engagement/engagement-view";
 import { requirePerson } from "@/app/_server/require-person";
 import { Refusal } from "@/lib/engagement/refusal";
+import { may } from "@/lib/engagement/roles";
 import { engagementSheet } from "@/lib/services/engagement-sheet";
 
 export const metadata = { title: "Engagement" };
@@ -17,5 +18,5 @@ export default async function EngagementPage({ params }: { readonly params: Prom
     if (error instanceof Refusal && error.status === 404) notFound();
     throw error;
   });
-  return <EngagementView initial={sheet} />;
+  return <EngagementView initial={sheet} readsBook={may(person, "read book")} />;
 }
