@@ -1,9 +1,12 @@
 import type { PassRow } from "@/db/queries/passes";
-import type { PassSheetBody } from "@/lib/contracts/passes";
+import type { EstimateBody, PassSheetBody } from "@/lib/contracts/passes";
+import type { Effect } from "@/lib/planning/effect";
+import type { Interval } from "@/lib/planning/interval";
 import { alongTrackErrorKm } from "@/lib/planning/keep-out";
 import { trimmed } from "@/lib/planning/words";
 import { isoOf } from "./closure-body";
 import type { FactBook } from "./fact-book";
+import type { ConcernedAuthority } from "./judge-dwell";
 import type { StationScene } from "./station-scene";
 
 /** The station with the limits that shape its dwells. */
@@ -68,4 +71,17 @@ export function crossingBodies(book: FactBook, row: PassRow): PassSheetBody["cro
     addedDeg: crossing.addedDeg,
     timingGuardS: crossing.timingGuardS,
   }));
+}
+
+/** What a dwell does, as it goes over the wire. */
+export function estimateBody(dwell: Interval, effect: Effect): EstimateBody {
+  const { meltOnsetS: _meltOnsetS, ...figures } = effect;
+  return { from: isoOf(dwell.fromMs), to: isoOf(dwell.toMs), ...figures };
+}
+
+/** Who would be asked, without the addresses that only notices need. */
+export function concernedBodies(concerned: readonly ConcernedAuthority[]): PassSheetBody["concerned"] {
+  return concerned.map(({ authorityId, name, kind, because, leadTimeMin }) => {
+    return { authorityId, name, kind, because, leadTimeMin };
+  });
 }

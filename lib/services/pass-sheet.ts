@@ -12,10 +12,17 @@ import { buildProfile } from "@/lib/planning/profile";
 import { isoOf } from "./closure-body";
 import { type FactBook, loadFactBook } from "./fact-book";
 import { intervalOf } from "./fact-rows";
-import { type ConcernedAuthority, concernedAuthorities } from "./judge-dwell";
+import { concernedAuthorities } from "./judge-dwell";
 import { passBody } from "./pass-body";
 import { groundBody } from "./pass-ground";
-import { crossingBodies, elementSetBody, laserBody, stationBody } from "./pass-sheet-parts";
+import {
+  concernedBodies,
+  crossingBodies,
+  elementSetBody,
+  estimateBody,
+  laserBody,
+  stationBody,
+} from "./pass-sheet-parts";
 import { AIM, orbitOrNull } from "./pass-work";
 import { type OfferedPass, planOffers } from "./plan-offers";
 import { elementsByRow } from "./replan-passes";
@@ -72,12 +79,6 @@ async function sheetOf(
   };
 }
 
-function concernedBodies(concerned: readonly ConcernedAuthority[]): PassSheetBody["concerned"] {
-  return concerned.map(({ authorityId, name, kind, because, leadTimeMin }) => {
-    return { authorityId, name, kind, because, leadTimeMin };
-  });
-}
-
 /** The worth curve and the samples of the whole pass; null where the model refuses it. */
 function profileOf(
   offered: OfferedPass,
@@ -118,7 +119,5 @@ function estimateOf(offered: OfferedPass, orbit: Orbit, dwell: Interval): Estima
   const { laser, body } = figured.figures;
   const { fromMs, toMs } = dwell;
   const worked = effectOfDwell({ orbit, frame: scene.map.frame, laser, body, fromMs, toMs });
-  if (!worked.ok) return null;
-  const { meltOnsetS: _meltOnsetS, ...effect } = worked.effect;
-  return { from: isoOf(fromMs), to: isoOf(toMs), ...effect };
+  return worked.ok ? estimateBody(dwell, worked.effect) : null;
 }

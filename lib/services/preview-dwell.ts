@@ -6,6 +6,7 @@ import { reasonsAgainst } from "./accept-dwell";
 import { closureBody } from "./closure-body";
 import { dwellOf } from "./dwell-input";
 import { judgeDwell } from "./judge-dwell";
+import { concernedBodies, estimateBody } from "./pass-sheet-parts";
 import { readQuery } from "./read-input";
 
 /**
@@ -23,32 +24,13 @@ export async function previewDwell(
   const wanted = readQuery(judgementQuery, query);
   const dwell = dwellOf(wanted);
   const judged = await judgeDwell(database(), { passId, ...dwell, nowMs, engagementId: null });
-  const { effect } = judged;
   return {
     from: wanted.from,
     to: wanted.to,
     refusals: reasonsAgainst(judged),
     pending: judged.pending.map(closureBody),
     notChecked: judged.notChecked.map(closureBody),
-    estimate: effect
-      ? {
-          from: wanted.from,
-          to: wanted.to,
-          pulses: effect.pulses,
-          energyJ: effect.energyJ,
-          deltaV: effect.deltaV,
-          semiMajorAxisBeforeKm: effect.semiMajorAxisBeforeKm,
-          semiMajorAxisAfterKm: effect.semiMajorAxisAfterKm,
-          perigeeBeforeKm: effect.perigeeBeforeKm,
-          perigeeAfterKm: effect.perigeeAfterKm,
-        }
-      : null,
-    concerned: judged.concerned.map(({ authorityId, name, kind, because, leadTimeMin }) => ({
-      authorityId,
-      name,
-      kind,
-      because,
-      leadTimeMin,
-    })),
+    estimate: judged.effect && estimateBody(dwell, judged.effect),
+    concerned: concernedBodies(judged.concerned),
   };
 }
